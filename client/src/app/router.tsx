@@ -1,0 +1,55 @@
+import { createBrowserRouter, type RouteObject } from 'react-router-dom';
+
+import { Home } from '#client/app/home.tsx';
+import { RootLayout } from '#client/app/root-layout.tsx';
+import { RouteError } from '#client/app/route-error.tsx';
+import { SignedInLayout } from '#client/app/signed-in-layout.tsx';
+import { Splash } from '#client/app/splash.tsx';
+import { WorkspaceLayout } from '#client/app/workspace-layout.tsx';
+
+/** Pages of a workspace; each is fetched when it is first opened and has its own error boundary. */
+const workspacePages: RouteObject[] = [
+  { index: true, lazy: () => import('#client/routes/shelf.tsx') },
+  { path: 'new', lazy: () => import('#client/routes/new-lattice.tsx') },
+  { path: 'lattices/:lattice', lazy: () => import('#client/routes/lattice.tsx') },
+  { path: 'members', lazy: () => import('#client/routes/members.tsx') },
+  { path: 'settings', lazy: () => import('#client/routes/settings.tsx') },
+  { path: 'audit', lazy: () => import('#client/routes/audit.tsx') },
+];
+
+const publicPages: RouteObject[] = [
+  { path: 'sign-in', lazy: () => import('#client/routes/sign-in.tsx') },
+  { path: 'setup', lazy: () => import('#client/routes/setup.tsx') },
+  { path: 'accept-invite/:token', lazy: () => import('#client/routes/accept-invite.tsx') },
+  { path: 's/:token', lazy: () => import('#client/routes/shared-revision.tsx') },
+];
+
+const guarded = (pages: RouteObject[]): RouteObject[] =>
+  pages.map((page) => ({ ...page, ErrorBoundary: RouteError }));
+
+/** Every address of the product. */
+export const routes: RouteObject[] = [
+  {
+    Component: RootLayout,
+    ErrorBoundary: RouteError,
+    HydrateFallback: Splash,
+    children: [
+      ...guarded(publicPages),
+      {
+        Component: SignedInLayout,
+        ErrorBoundary: RouteError,
+        children: [
+          { index: true, Component: Home },
+          ...guarded([{ path: 'me', lazy: () => import('#client/routes/me.tsx') }]),
+          { path: 'w/:workspace', Component: WorkspaceLayout, children: guarded(workspacePages) },
+        ],
+      },
+      ...guarded([{ path: '*', lazy: () => import('#client/routes/not-found.tsx') }]),
+    ],
+  },
+];
+
+/** The router of the browser's address bar. */
+export function createRouter(): ReturnType<typeof createBrowserRouter> {
+  return createBrowserRouter(routes);
+}
