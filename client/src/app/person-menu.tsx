@@ -1,7 +1,6 @@
-import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { useMutation } from '@tanstack/react-query';
 import { LogOut, Monitor, Moon, Sun, UserRound, Users } from 'lucide-react';
 import type { JSX } from 'react';
-import { useNavigate } from 'react-router-dom';
 
 import { done } from '#common/schemas/shared';
 import { Menu, MenuItem, MenuLink, MenuNote, MenuSeparator } from '#client/components/menu.tsx';
@@ -9,7 +8,7 @@ import { PersonBadge } from '#client/components/person-badge.tsx';
 import { useToast } from '#client/components/toast.tsx';
 import { api } from '#client/lib/api-client.ts';
 import { messageOf } from '#client/lib/api-error.ts';
-import { sessionQuery, useCurrentUser, useOptionalWorkspace } from '#client/lib/session.ts';
+import { useCurrentUser, useOptionalWorkspace } from '#client/lib/session.ts';
 import { setThemePreference, useThemePreference } from '#client/lib/theme.ts';
 
 const themes = [
@@ -19,20 +18,11 @@ const themes = [
 ] as const;
 
 function useSignOut(): () => void {
-  const client = useQueryClient();
-  const navigate = useNavigate();
   const show = useToast();
   const { mutate } = useMutation({
     mutationFn: () => api.delete('/session', { schema: done }),
-    onSuccess: async () => {
-      await navigate('/sign-in');
-      const session = client.getQueryData(sessionQuery.queryKey);
-      // What one person saw must not be there for the next one.
-      client.clear();
-      if (session !== undefined) {
-        client.setQueryData(sessionQuery.queryKey, { ...session, user: null });
-      }
-    },
+    // A full load: nothing that one person saw stays in memory for the next one.
+    onSuccess: () => window.location.assign('/sign-in'),
     onError: (error) => show({ message: messageOf(error), tone: 'failure' }),
   });
   return mutate;

@@ -23,7 +23,7 @@ export function RouteError(): JSX.Element {
     ? new ApiError(0, 'page.unreachable', 'This page could not be fetched. Load it again.')
     : error;
   return (
-    <main id="main" tabIndex={-1}>
+    <div>
       <title>Something went wrong · Holdfast</title>
       <ErrorState
         error={shown}
@@ -31,6 +31,15 @@ export function RouteError(): JSX.Element {
         onRetry={() => window.location.reload()}
         action={<ButtonLink to="/">To the shelf</ButtonLink>}
       />
+    </div>
+  );
+}
+
+/** The same when nothing of the frame is left. */
+export function RootError(): JSX.Element {
+  return (
+    <main id="main" tabIndex={-1}>
+      <RouteError />
     </main>
   );
 }

@@ -2,7 +2,7 @@ import { createBrowserRouter, type RouteObject } from 'react-router-dom';
 
 import { Home } from '#client/app/home.tsx';
 import { RootLayout } from '#client/app/root-layout.tsx';
-import { RouteError } from '#client/app/route-error.tsx';
+import { RootError, RouteError } from '#client/app/route-error.tsx';
 import { SignedInLayout } from '#client/app/signed-in-layout.tsx';
 import { Splash } from '#client/app/splash.tsx';
 import { WorkspaceLayout } from '#client/app/workspace-layout.tsx';
@@ -24,27 +24,27 @@ const publicPages: RouteObject[] = [
   { path: 's/:token', lazy: () => import('#client/routes/shared-revision.tsx') },
 ];
 
-const guarded = (pages: RouteObject[]): RouteObject[] =>
-  pages.map((page) => ({ ...page, ErrorBoundary: RouteError }));
+const guarded = (pages: RouteObject[], ErrorBoundary = RouteError): RouteObject[] =>
+  pages.map((page) => ({ ...page, ErrorBoundary }));
 
 /** Every address of the product. */
 export const routes: RouteObject[] = [
   {
     Component: RootLayout,
-    ErrorBoundary: RouteError,
+    ErrorBoundary: RootError,
     HydrateFallback: Splash,
     children: [
-      ...guarded(publicPages),
+      ...guarded(publicPages, RootError),
       {
         Component: SignedInLayout,
-        ErrorBoundary: RouteError,
+        ErrorBoundary: RootError,
         children: [
           { index: true, Component: Home },
           ...guarded([{ path: 'me', lazy: () => import('#client/routes/me.tsx') }]),
           { path: 'w/:workspace', Component: WorkspaceLayout, children: guarded(workspacePages) },
         ],
       },
-      ...guarded([{ path: '*', lazy: () => import('#client/routes/not-found.tsx') }]),
+      ...guarded([{ path: '*', lazy: () => import('#client/routes/not-found.tsx') }], RootError),
     ],
   },
 ];

@@ -1,4 +1,4 @@
-import { Suspense, useRef, type JSX } from 'react';
+import { Suspense, useState, type JSX } from 'react';
 import { Navigate, Outlet, useLocation } from 'react-router-dom';
 
 import { TopBar } from '#client/app/top-bar.tsx';
@@ -10,15 +10,15 @@ import { useSession } from '#client/lib/session.ts';
 export function SignedInLayout(): JSX.Element {
   const session = useSession();
   const location = useLocation();
-  const wasSignedIn = useRef(session.user !== null);
+  // Kept from the first draw: tells someone whose session ended from someone who never had one.
+  const [wasSignedIn] = useState(session.user !== null);
 
   if (session.user === null) {
     if (session.needsSetup) {
       return <Navigate to="/setup" replace />;
     }
     const here = `${location.pathname}${location.search}${location.hash}`;
-    // eslint-disable-next-line react-hooks/refs -- only tells the two ways here apart, never drawn
-    const reason = wasSignedIn.current ? 'expired' : undefined;
+    const reason = wasSignedIn ? 'expired' : undefined;
     return <Navigate to={signInAddress(here, reason)} replace />;
   }
   return (

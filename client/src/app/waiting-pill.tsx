@@ -5,6 +5,7 @@ import { Link } from 'react-router-dom';
 import type { MembershipSummary } from '#common/schemas/auth';
 import { shelfPage } from '#common/schemas/lattice';
 import { api } from '#client/lib/api-client.ts';
+import { latticesKey } from '#client/lib/query-keys.ts';
 import { useCan } from '#client/lib/session.ts';
 
 /** How many lattices wait for someone of this person's role; the number leads to them. */
@@ -12,7 +13,7 @@ export function WaitingPill({ workspace }: { workspace: MembershipSummary }): JS
   const can = useCan();
   const state = can('revision.return') ? 'in_review' : can('revision.save') ? 'returned' : null;
   const { data: count } = useQuery({
-    queryKey: ['workspaces', workspace.workspaceSlug, 'lattices', 'waiting', state],
+    queryKey: [...latticesKey(workspace.workspaceSlug), 'waiting', state],
     queryFn: ({ signal }) =>
       api.get(`/workspaces/${workspace.workspaceSlug}/lattices`, {
         schema: shelfPage,

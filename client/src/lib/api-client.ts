@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import type { z } from 'zod';
 
 import { problemBody } from '#common/errors/problem';
 import { ApiError } from '#client/lib/api-error.ts';

@@ -2,7 +2,12 @@ import type { JSX } from 'react';
 
 import { NotFoundState } from '#client/components/not-found-state.tsx';
 
-/** Replaced in the next commit by the page itself. */
+/** Any address that is no page. */
 export function Component(): JSX.Element {
-  return <NotFoundState />;
+  return (
+    <main id="main" tabIndex={-1}>
+      <h1 className="sr-only">Not found</h1>
+      <NotFoundState />
+    </main>
+  );
 }
