@@ -3,7 +3,7 @@ import type { JSX } from 'react';
 import { Link } from 'react-router-dom';
 
 import { PersonMenu } from '#client/app/person-menu.tsx';
-import { ShelfSearch } from '#client/app/shelf-search.tsx';
+import { LatticeSearch } from '#client/components/lattice-search.tsx';
 import { WaitingPill } from '#client/app/waiting-pill.tsx';
 import { WorkspaceMenu } from '#client/app/workspace-menu.tsx';
 import { Logo, LogoMark } from '#client/components/logo.tsx';
@@ -24,7 +24,7 @@ export function TopBar(): JSX.Element {
       <span className="grow" />
       {workspace !== null && (
         <>
-          <ShelfSearch
+          <LatticeSearch
             workspace={workspace.workspaceSlug}
             className="w-full max-w-105 max-md:hidden"
           />

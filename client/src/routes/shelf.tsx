@@ -1,8 +1,15 @@
 import type { JSX } from 'react';
 
-import { NotFoundState } from '#client/components/not-found-state.tsx';
+import { Page } from '#client/components/page.tsx';
+import { Shelf } from '#client/features/shelf/components/shelf.tsx';
+import { useWorkspace } from '#client/lib/session.ts';
 
-/** Replaced in the next commit by the page itself. */
+/** /w/:workspace */
 export function Component(): JSX.Element {
-  return <NotFoundState />;
+  const workspace = useWorkspace();
+  return (
+    <Page title={workspace.workspaceName}>
+      <Shelf workspace={workspace.workspaceSlug} />
+    </Page>
+  );
 }

@@ -1,0 +1,163 @@
+import { useTable, type SortingState, type Updater } from '@tanstack/react-table';
+import { ArrowDown, ArrowUp } from 'lucide-react';
+import { useMemo, type JSX, type MouseEvent } from 'react';
+import { useNavigate } from 'react-router-dom';
+
+import { shelfSort, type LatticeSummary } from '#common/schemas/lattice';
+import { shelfColumns, shelfFeatures } from '#client/features/shelf/components/shelf-columns.tsx';
+import type { ShelfView } from '#client/features/shelf/shelf-view.ts';
+import { classNames } from '#client/lib/class-names.ts';
+
+interface ShelfTableProps {
+  workspace: string;
+  lattices: LatticeSummary[];
+  view: ShelfView;
+  onSort: (sort: Pick<ShelfView, 'sort' | 'order'>) => void;
+  isStale: boolean;
+}
+
+interface SortHeaderProps {
+  title: string;
+  direction: 'asc' | 'desc' | false;
+  isEnd: boolean;
+  onToggle: () => void;
+}
+
+function SortHeader({ title, direction, isEnd, onToggle }: SortHeaderProps): JSX.Element {
+  const Arrow = direction === 'asc' ? ArrowUp : ArrowDown;
+  return (
+    <button
+      type="button"
+      onClick={onToggle}
+      className={classNames(
+        'group inline-flex items-center gap-1 rounded-control hover:text-ink',
+        direction !== false && 'font-medium text-ink',
+        isEnd && 'flex-row-reverse',
+      )}
+    >
+      {title}
+      <Arrow
+        aria-hidden
+        className={classNames(
+          'size-3.5',
+          direction === false && 'opacity-0 group-hover:opacity-60 group-focus-visible:opacity-60',
+        )}
+      />
+    </button>
+  );
+}
+
+/** Whether a click in a row was meant for something in it, or marked text. */
+function isForSomethingElse(event: MouseEvent<HTMLElement>): boolean {
+  const target = event.target as HTMLElement;
+  return (
+    // Menus and dialogs of a row are drawn elsewhere, yet their clicks come through React.
+    !event.currentTarget.contains(target) ||
+    target.closest('a, button, [role="menuitem"], [role="dialog"]') !== null ||
+    window.getSelection()?.toString() !== ''
+  );
+}
+
+function useShelfTable({ workspace, lattices, view, onSort }: ShelfTableProps) {
+  const columns = useMemo(() => shelfColumns(workspace, view.deleted), [workspace, view.deleted]);
+  const sorting: SortingState = useMemo(
+    () => [{ id: view.sort, desc: view.order === 'desc' }],
+    [view.sort, view.order],
+  );
+  return useTable({
+    features: shelfFeatures,
+    columns,
+    data: lattices,
+    getRowId: (lattice) => lattice.id,
+    manualSorting: true,
+    enableSortingRemoval: false,
+    state: { sorting },
+    onSortingChange: (change: Updater<SortingState>) => {
+      const [next] = typeof change === 'function' ? change(sorting) : change;
+      const sort = shelfSort.safeParse(next?.id);
+      if (next !== undefined && sort.success) {
+        onSort({ sort: sort.data, order: next.desc ? 'desc' : 'asc' });
+      }
+    },
+  });
+}
+
+const cellLook = 'py-2 pr-5 align-middle last:pr-1 first:pl-1';
+const ariaSort = { asc: 'ascending', desc: 'descending' } as const;
+
+/** The shelf as a table: a header sorts, a row opens. */
+export function ShelfTable(props: ShelfTableProps): JSX.Element {
+  const { workspace, view, isStale } = props;
+  const table = useShelfTable(props);
+  const navigate = useNavigate();
+  const open = (event: MouseEvent<HTMLElement>, id: string): void => {
+    if (!view.deleted && !isForSomethingElse(event)) {
+      void navigate(`/w/${workspace}/lattices/${id}`);
+    }
+  };
+  return (
+    <table className={classNames('w-full border-collapse text-left', isStale && 'opacity-60')}>
+      <caption className="sr-only">Lattices of the workspace</caption>
+      <thead className="border-b border-line text-small text-soft">
+        {table.getHeaderGroups().map((group) => (
+          <tr key={group.id}>
+            {group.headers.map(({ id, column }) => {
+              const title = String(column.columnDef.header ?? '');
+              const direction = column.getIsSorted();
+              const className = column.columnDef.meta?.className;
+              return (
+                <th
+                  key={id}
+                  scope="col"
+                  aria-sort={direction === false ? undefined : ariaSort[direction]}
+                  className={classNames(cellLook, 'font-normal', className)}
+                >
+                  {column.columnDef.enableSorting === false ? (
+                    title === '' ? (
+                      <span className="sr-only">Actions</span>
+                    ) : (
+                      title
+                    )
+                  ) : (
+                    <SortHeader
+                      {...{ title, direction }}
+                      isEnd={className?.includes('text-right') === true}
+                      onToggle={() =>
+                        column.toggleSorting(
+                          direction === false
+                            ? column.columnDef.sortDescFirst === true
+                            : direction === 'asc',
+                        )
+                      }
+                    />
+                  )}
+                </th>
+              );
+            })}
+          </tr>
+        ))}
+      </thead>
+      <tbody>
+        {table.getRowModel().rows.map((row) => (
+          <tr
+            key={row.id}
+            onClick={(event) => open(event, row.id)}
+            className={classNames(
+              'h-13 border-b border-line hover:bg-raised',
+              !view.deleted && 'cursor-pointer',
+            )}
+          >
+            {row.getAllCells().map((cell) => (
+              <td
+                key={cell.id}
+                className={classNames(cellLook, cell.column.columnDef.meta?.className)}
+              >
+                <table.FlexRender cell={cell} />
+              </td>
+            ))}
+          </tr>
+        ))}
+      </tbody>
+    </table>
+  );
+}
