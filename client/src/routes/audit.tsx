@@ -1,8 +1,22 @@
 import type { JSX } from 'react';
 
-import { NotFoundState } from '#client/components/not-found-state.tsx';
+import { NoAccess } from '#client/components/no-access.tsx';
+import { Page, PageHeader } from '#client/components/page.tsx';
+import { AuditLog } from '#client/features/workspaces/components/audit-log.tsx';
+import { useCan, useWorkspace } from '#client/lib/session.ts';
 
-/** Replaced in the next commit by the page itself. */
+/** /w/:workspace/audit */
 export function Component(): JSX.Element {
-  return <NotFoundState />;
+  const workspace = useWorkspace();
+  const can = useCan();
+  return (
+    <Page title={`Audit log of ${workspace.workspaceName}`} width="reading">
+      <PageHeader title="Audit log" />
+      {can('audit.read') ? (
+        <AuditLog workspace={workspace.workspaceSlug} />
+      ) : (
+        <NoAccess>Only an owner of {workspace.workspaceName} can read its audit log.</NoAccess>
+      )}
+    </Page>
+  );
 }

@@ -1,8 +1,15 @@
 import type { JSX } from 'react';
 
-import { NotFoundState } from '#client/components/not-found-state.tsx';
+import { Page } from '#client/components/page.tsx';
+import { Members } from '#client/features/members/components/members.tsx';
+import { useWorkspace } from '#client/lib/session.ts';
 
-/** Replaced in the next commit by the page itself. */
+/** /w/:workspace/members */
 export function Component(): JSX.Element {
-  return <NotFoundState />;
+  const workspace = useWorkspace();
+  return (
+    <Page title={`Members of ${workspace.workspaceName}`} width="reading">
+      <Members workspace={workspace} />
+    </Page>
+  );
 }

@@ -1,8 +1,22 @@
 import type { JSX } from 'react';
 
-import { NotFoundState } from '#client/components/not-found-state.tsx';
+import { NoAccess } from '#client/components/no-access.tsx';
+import { Page, PageHeader } from '#client/components/page.tsx';
+import { WorkspaceSettings } from '#client/features/workspaces/components/workspace-settings.tsx';
+import { useCan, useWorkspace } from '#client/lib/session.ts';
 
-/** Replaced in the next commit by the page itself. */
+/** /w/:workspace/settings */
 export function Component(): JSX.Element {
-  return <NotFoundState />;
+  const workspace = useWorkspace();
+  const can = useCan();
+  return (
+    <Page title={`Settings of ${workspace.workspaceName}`} width="reading">
+      <PageHeader title="Settings" />
+      {can('workspace.update') ? (
+        <WorkspaceSettings workspace={workspace} />
+      ) : (
+        <NoAccess>Only an owner of {workspace.workspaceName} can change its settings.</NoAccess>
+      )}
+    </Page>
+  );
 }
