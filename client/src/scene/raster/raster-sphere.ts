@@ -1,0 +1,168 @@
+import { blend, darken, type RasterBuffer } from './raster-buffer.ts';
+import { ballTableFor, type BallTable } from './raster-tones.ts';
+
+/** A ball on the screen: pixels, and Å for the depth. */
+export interface ScreenBall {
+  x: number;
+  y: number;
+  radiusPx: number;
+  depthA: number;
+  radiusA: number;
+}
+
+/** Clips a span of pixels to 0 … size − 1. */
+function clip(value: number, size: number): number {
+  return value < 0 ? 0 : value > size - 1 ? size - 1 : value;
+}
+
+/**
+ * Draws one row of a ball. Pixels well inside take the table's tone as it is; those on the rim
+ * are blended by how much of them the ball covers.
+ */
+function drawRow(
+  buffer: RasterBuffer,
+  ball: ScreenBall,
+  table: BallTable,
+  palette: Uint32Array,
+  y: number,
+): void {
+  const { pixels, depths, width } = buffer;
+  const { x: cx, radiusPx: r, depthA, radiusA } = ball;
+  const { size, tones, heights } = table;
+  const dy = y + 0.5 - ball.y;
+  const reach = Math.sqrt(Math.max(0, (r + 0.5) * (r + 0.5) - dy * dy));
+  const first = clip(Math.floor(cx - reach), width);
+  const last = clip(Math.ceil(cx + reach) - 1, width);
+  const innerSquared = r > 0.7 ? (r - 0.7) * (r - 0.7) : 0;
+  const scale = size / 2 / r;
+  const row = clip(Math.floor(size / 2 + dy * scale), size) * size;
+  for (let x = first; x <= last; x += 1) {
+    const dx = x + 0.5 - cx;
+    const at = y * width + x;
+    const entry = row + clip((size / 2 + dx * scale) | 0, size);
+    const depth = depthA - heights[entry]! * radiusA;
+    if (depth >= depths[at]!) {
+      continue;
+    }
+    const squared = dx * dx + dy * dy;
+    const colour = palette[tones[entry]!]!;
+    if (squared <= innerSquared) {
+      pixels[at] = colour;
+      depths[at] = depth;
+      continue;
+    }
+    const cover = r + 0.5 - Math.sqrt(squared);
+    if (cover > 0) {
+      pixels[at] = blend(pixels[at]!, colour, cover >= 1 ? 256 : (cover * 256) | 0);
+      if (cover > 0.5) {
+        depths[at] = depth;
+      }
+    }
+  }
+}
+
+export function drawBall(buffer: RasterBuffer, ball: ScreenBall, palette: Uint32Array): void {
+  const { radiusPx: r, y: cy, x: cx } = ball;
+  if (r < 0.3 || cx + r < 0 || cx - r > buffer.width) {
+    return;
+  }
+  const table = ballTableFor(r);
+  const first = Math.max(0, Math.floor(cy - r - 0.5));
+  const last = Math.min(buffer.height - 1, Math.ceil(cy + r + 0.5) - 1);
+  for (let y = first; y <= last; y += 1) {
+    drawRow(buffer, ball, table, palette, y);
+  }
+}
+
+/** How far contact shading reaches beyond a ball, in its radii, and how deep it is. */
+const haloReach = 0.42;
+const haloDepth = 0.34;
+/** Things farther behind than this many radii are not touched. */
+const haloFarRadii = 5;
+
+/** Contact shading: darkens what stands close behind a ball, around its outline. */
+export function drawHalo(buffer: RasterBuffer, ball: ScreenBall): void {
+  const { x: cx, y: cy, radiusPx: r, depthA, radiusA } = ball;
+  const { pixels, depths, width, height } = buffer;
+  const outer = r * (1 + haloReach);
+  const far = radiusA * haloFarRadii;
+  const firstRow = Math.max(0, Math.floor(cy - outer));
+  const lastRow = Math.min(height - 1, Math.ceil(cy + outer));
+  for (let y = firstRow; y <= lastRow; y += 1) {
+    const dy = y + 0.5 - cy;
+    const reach = Math.sqrt(Math.max(0, outer * outer - dy * dy));
+    const lastColumn = Math.min(width - 1, Math.ceil(cx + reach));
+    for (let x = Math.max(0, Math.floor(cx - reach)); x <= lastColumn; x += 1) {
+      const at = y * width + x;
+      const behind = depths[at]! - depthA;
+      if (behind <= 0 || behind >= far) {
+        continue;
+      }
+      const dx = x + 0.5 - cx;
+      const away = (Math.sqrt(dx * dx + dy * dy) - r) / (r * haloReach);
+      if (away < 1) {
+        const edge = 1 - (away < 0 ? 0 : away);
+        const strength = haloDepth * edge * edge * (1 - behind / far);
+        pixels[at] = darken(pixels[at]!, (256 * (1 - strength)) | 0);
+      }
+    }
+  }
+}
+
+/** Half length and half thickness of a mark's arms, in radii of its ball. */
+const armLength = 0.4;
+const armThickness = 0.095;
+
+/** Cover of a pixel by a bar of the given half sizes around the ball's middle, 0 … 1. */
+function barCover(dx: number, dy: number, halfX: number, halfY: number): number {
+  const inX = Math.max(0, Math.min(1, halfX - Math.abs(dx) + 0.5));
+  const inY = Math.max(0, Math.min(1, halfY - Math.abs(dy) + 0.5));
+  return inX * inY;
+}
+
+function markCover(dx: number, dy: number, r: number, sign: number): number {
+  const long = r * armLength;
+  const thick = Math.max(0.7, r * armThickness);
+  const level = barCover(dx, dy, long, thick);
+  return sign > 0 ? Math.max(level, barCover(dx, dy, thick, long)) : level;
+}
+
+/** A raised + or − on the side toward the viewer: lit bars over a short shadow. */
+export function drawMark(
+  buffer: RasterBuffer,
+  ball: ScreenBall,
+  sign: number,
+  light: number,
+  fade: number,
+): void {
+  const { x: cx, y: cy, radiusPx: r, depthA, radiusA } = ball;
+  if (r < 4) {
+    return;
+  }
+  const front = depthA - radiusA * 1.001;
+  const shift = Math.max(0.8, r * 0.035);
+  const reach = r * armLength + shift + 1;
+  const shown = 1 - fade;
+  for (
+    let y = Math.max(0, Math.floor(cy - reach));
+    y <= Math.min(buffer.height - 1, cy + reach);
+    y += 1
+  ) {
+    for (
+      let x = Math.max(0, Math.floor(cx - reach));
+      x <= Math.min(buffer.width - 1, cx + reach);
+      x += 1
+    ) {
+      const at = y * buffer.width + x;
+      if (buffer.depths[at]! < front) {
+        continue;
+      }
+      const dx = x + 0.5 - cx;
+      const dy = y + 0.5 - cy;
+      const shadow = markCover(dx - shift, dy - shift, r, sign) * 0.45 * shown;
+      const body = markCover(dx, dy, r, sign) * 0.96 * shown;
+      const below = darken(buffer.pixels[at]!, (256 * (1 - shadow)) | 0);
+      buffer.pixels[at] = blend(below, light, (256 * body) | 0);
+    }
+  }
+}

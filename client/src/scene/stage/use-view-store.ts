@@ -1,0 +1,28 @@
+import { useEffect, useRef, useState } from 'react';
+
+import { defaultSceneView, isSameView, type SceneView } from '../model/scene-view.ts';
+import { ViewStore } from './view-store.ts';
+
+/** The camera: follows the `view` prop, reports where it came to rest. */
+export function useViewStore(
+  view: SceneView | null,
+  onViewChange: ((view: SceneView) => void) | undefined,
+): ViewStore {
+  const [store] = useState(() => new ViewStore(view ?? defaultSceneView));
+  const reported = useRef(view);
+  useEffect(
+    () =>
+      store.onSettled((settled) => {
+        reported.current = settled;
+        onViewChange?.(settled);
+      }),
+    [store, onViewChange],
+  );
+  useEffect(() => {
+    const isOwn = reported.current !== null && view !== null && isSameView(view, reported.current);
+    if (view !== null && !isOwn && !isSameView(view, store.view)) {
+      store.set(view);
+    }
+  }, [store, view]);
+  return store;
+}
