@@ -1,7 +1,11 @@
 import '@testing-library/jest-dom/vitest';
 
-import { cleanup } from '@testing-library/react';
+import { cleanup, configure } from '@testing-library/react';
 import { afterEach, vi } from 'vitest';
+
+// A page's code is fetched when it is first opened, which takes a while on a small machine.
+configure({ asyncUtilTimeout: 8_000 });
+vi.setConfig({ testTimeout: 20_000 });
 
 // What jsdom lacks and the components need: media queries, size observers, scrolling.
 if (typeof window !== 'undefined') {

@@ -39,7 +39,9 @@ export function EmptyState({ title, children, action }: EmptyStateProps): JSX.El
     <div className="px-4 py-16 text-center">
       <OpenPlace />
       <h2 className="text-lead">{title}</h2>
-      {children !== undefined && <div className="mx-auto mt-1 max-w-md text-soft">{children}</div>}
+      {children !== undefined && (
+        <div className="mx-auto mt-1 max-w-md text-pretty text-soft">{children}</div>
+      )}
       {action !== undefined && <div className="mt-5 flex justify-center gap-2">{action}</div>}
     </div>
   );

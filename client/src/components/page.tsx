@@ -41,7 +41,7 @@ export function PageHeader({ title, meta, actions }: PageHeaderProps): JSX.Eleme
       {meta !== undefined && (
         <div className="flex flex-wrap items-center gap-x-3.5 gap-y-1 pb-1 text-soft">{meta}</div>
       )}
-      {actions !== undefined && <div className="flex gap-2 md:ml-auto">{actions}</div>}
+      {actions !== undefined && <div className="ml-auto flex gap-2">{actions}</div>}
     </header>
   );
 }

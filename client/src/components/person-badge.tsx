@@ -8,6 +8,8 @@ interface PersonBadgeProps {
   /** The name beside the round; else it is read aloud only. */
   isNamed?: boolean;
   tone?: 'ink' | 'plain';
+  /** The name stands beside it already. */
+  isDecorative?: boolean;
 }
 
 /** The round with a person's initials. */
@@ -16,9 +18,10 @@ export function PersonBadge({
   initials,
   isNamed = false,
   tone = 'plain',
+  isDecorative = false,
 }: PersonBadgeProps): JSX.Element {
   return (
-    <span className="inline-flex min-w-0 items-center gap-2">
+    <span className="inline-flex min-w-0 shrink-0 items-center gap-2">
       <span
         aria-hidden
         title={isNamed ? undefined : name}
@@ -29,7 +32,7 @@ export function PersonBadge({
       >
         {initials}
       </span>
-      <span className={isNamed ? 'truncate' : 'sr-only'}>{name}</span>
+      {!isDecorative && <span className={isNamed ? 'truncate' : 'sr-only'}>{name}</span>}
     </span>
   );
 }

@@ -37,7 +37,11 @@ export function TextField({
           id={id}
           aria-invalid={error ? true : undefined}
           aria-describedby={describedBy(id, error, hint)}
-          className={classNames(fieldLook, 'h-9 px-3', Boolean(suffix) && 'pr-10')}
+          className={classNames(
+            fieldLook,
+            'h-9 px-3 read-only:bg-paper',
+            Boolean(suffix) && 'pr-10',
+          )}
         />
         {Boolean(suffix) && (
           <span className="pointer-events-none absolute inset-y-0 right-3 flex items-center text-small text-soft">

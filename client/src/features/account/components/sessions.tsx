@@ -24,8 +24,8 @@ function Session({ session }: { session: SessionSummary }): JSX.Element {
       },
     );
   return (
-    <li className="flex flex-wrap items-center gap-x-5 gap-y-1 py-3">
-      <span className="min-w-52 grow">
+    <li className="flex items-center gap-5 py-3">
+      <span className="min-w-0 grow">
         <span className="block font-medium">{device}</span>
         <span className="block text-small text-soft">
           {session.address !== null && `${session.address}, `}
@@ -34,10 +34,15 @@ function Session({ session }: { session: SessionSummary }): JSX.Element {
         </span>
       </span>
       {session.isCurrent ? (
-        <span className="text-small text-soft">this one</span>
+        <span className="text-small whitespace-nowrap text-soft">this one</span>
       ) : (
-        <Button size="small" isBusy={revoke.isPending} onClick={end}>
-          End<span className="sr-only"> the session on {device}</span>
+        <Button
+          size="small"
+          aria-label={`End the session on ${device}`}
+          isBusy={revoke.isPending}
+          onClick={end}
+        >
+          End
         </Button>
       )}
     </li>

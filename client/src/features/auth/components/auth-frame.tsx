@@ -26,12 +26,15 @@ export function AuthFrame({ title, heading, lead, children }: AuthFrameProps): J
           <div className="mt-6">{children}</div>
         </div>
       </main>
-      <div className="relative hidden flex-col justify-center border-l border-line bg-wash p-10 lg:flex">
-        <LatticeDrawing className="mx-auto min-h-0 w-full max-w-140 grow" />
+      <aside
+        aria-label="About Holdfast"
+        className="sticky top-0 hidden h-dvh flex-col justify-center border-l border-line bg-wash p-10 lg:flex"
+      >
+        <LatticeDrawing className="mx-auto min-h-0 w-full max-w-170 grow" />
         <p className="mx-auto max-w-md pb-6 text-center text-lead text-balance text-soft">
           Decide, together, whether an ionic crystal structure holds.
         </p>
-      </div>
+      </aside>
     </div>
   );
 }

@@ -12,7 +12,7 @@ interface DemoPeopleProps {
 /** What each role is for, in the words of the sign-in page. */
 const does: Record<Role, string> = {
   owner: 'runs the workspace',
-  crystallographer: 'defines cells, computes, shares',
+  crystallographer: 'defines cells',
   reviewer: 'remarks, accepts, returns',
   reader: 'reads',
 };
@@ -34,7 +34,8 @@ export function DemoPeople({ demo, isDisabled, onChoose }: DemoPeopleProps): JSX
       </h2>
       <p className="mt-1 text-small text-soft">
         Everyone in the workspace {demo.workspaceName} is invented. Step into one of their places;
-        the password of each is <span className="font-medium text-ink">{demo.password}</span>.
+        the password of each is{' '}
+        <span className="font-medium whitespace-nowrap text-ink">{demo.password}</span>.
       </p>
       <ul className="rule-list mt-3 rounded-control border border-line bg-raised">
         {demo.people.map((person) => (
@@ -46,7 +47,7 @@ export function DemoPeople({ demo, isDisabled, onChoose }: DemoPeopleProps): JSX
               aria-label={`Sign in as ${person.name}, ${person.role}`}
               className="group flex w-full items-center gap-3 px-3 py-2 text-left -outline-offset-2 hover:bg-wash disabled:opacity-55"
             >
-              <PersonBadge name="" initials={initialsOf(person.name)} />
+              <PersonBadge name={person.name} initials={initialsOf(person.name)} isDecorative />
               <span className="min-w-0 grow">
                 <span className="block truncate font-medium">{person.name}</span>
                 <span className="block text-small text-soft">

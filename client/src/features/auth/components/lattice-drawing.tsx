@@ -1,7 +1,10 @@
 import type { JSX } from 'react';
 
+type Place = readonly [number, number, number];
+
 interface DrawnIon {
   key: string;
+  place: Place;
   x: number;
   y: number;
   depth: number;
@@ -9,30 +12,34 @@ interface DrawnIon {
   isCation: boolean;
 }
 
+interface Projected {
+  x: number;
+  y: number;
+  depth: number;
+  scale: number;
+}
+
 interface DrawnBond {
   key: string;
-  from: DrawnIon;
-  to: DrawnIon;
   depth: number;
+  /** From the surface of either ion to the middle. */
+  halves: readonly { from: Projected; to: Projected; isCation: boolean }[];
 }
 
 const turn = 0.56;
 const tilt = 0.38;
 const scale = 118;
 const viewDistance = 9;
+const radiusOf = (isCation: boolean): number => (isCation ? 0.2 : 0.31);
 
 /** Perspective drawing of a point of the block −1 … 1. */
-function project(
-  x: number,
-  y: number,
-  z: number,
-): { x: number; y: number; depth: number; f: number } {
+function project([x, y, z]: Place): Projected {
   const across = x * Math.cos(turn) + z * Math.sin(turn);
   const toward = -x * Math.sin(turn) + z * Math.cos(turn);
   const up = y * Math.cos(tilt) - toward * Math.sin(tilt);
   const depth = y * Math.sin(tilt) + toward * Math.cos(tilt);
-  const f = viewDistance / (viewDistance - depth);
-  return { x: across * scale * f, y: -up * scale * f, depth, f };
+  const near = (scale * viewDistance) / (viewDistance - depth);
+  return { x: across * near, y: -up * near, depth, scale: near };
 }
 
 function drawIons(): DrawnIon[] {
@@ -40,31 +47,44 @@ function drawIons(): DrawnIon[] {
   return steps.flatMap((i) =>
     steps.flatMap((j) =>
       steps.map((k) => {
-        const place = project(i, j, k);
+        const place = [i, j, k] as const;
+        const { x, y, depth, scale: near } = project(place);
         const isCation = (i + j + k) % 2 !== 0;
-        return {
-          key: `${i}.${j}.${k}`,
-          x: place.x,
-          y: place.y,
-          depth: place.depth,
-          radius: (isCation ? 0.2 : 0.31) * scale * place.f,
-          isCation,
-        };
+        const radius = radiusOf(isCation) * near;
+        return { key: place.join('.'), place, x, y, depth, radius, isCation };
       }),
     ),
   );
 }
 
+const along = (from: Place, to: Place, part: number): Place => [
+  from[0] + (to[0] - from[0]) * part,
+  from[1] + (to[1] - from[1]) * part,
+  from[2] + (to[2] - from[2]) * part,
+];
+
+function drawBond(one: DrawnIon, other: DrawnIon): DrawnBond {
+  const half = (from: DrawnIon, to: DrawnIon): DrawnBond['halves'][number] => ({
+    // A little inside the surface, so that no gap shows.
+    from: project(along(from.place, to.place, radiusOf(from.isCation) * 0.94)),
+    to: project(along(from.place, to.place, 0.5)),
+    isCation: from.isCation,
+  });
+  return {
+    key: `${one.key}-${other.key}`,
+    depth: (one.depth + other.depth) / 2,
+    halves: [half(one, other), half(other, one)],
+  };
+}
+
 function drawBonds(ions: readonly DrawnIon[]): DrawnBond[] {
   const at = new Map(ions.map((ion) => [ion.key, ion]));
-  return ions.flatMap((from) => {
-    const [i = 0, j = 0, k = 0] = from.key.split('.').map(Number);
+  return ions.flatMap((ion) => {
+    const [i, j, k] = ion.place;
     const ahead = [`${i + 1}.${j}.${k}`, `${i}.${j + 1}.${k}`, `${i}.${j}.${k + 1}`];
     return ahead.flatMap((key) => {
-      const to = at.get(key);
-      return to === undefined
-        ? []
-        : [{ key: `${from.key}-${key}`, from, to, depth: Math.min(from.depth, to.depth) - 0.01 }];
+      const other = at.get(key);
+      return other === undefined ? [] : [drawBond(ion, other)];
     });
   });
 }
@@ -79,22 +99,19 @@ const parts = [
 const fade = (depth: number): number => Math.min(1, 0.68 + 0.24 * depth);
 
 function Bond({ bond }: { bond: DrawnBond }): JSX.Element {
-  const { from, to } = bond;
-  const middle = { x: (from.x + to.x) / 2, y: (from.y + to.y) / 2 };
-  const half = (end: DrawnIon): JSX.Element => (
-    <line
-      x1={end.x}
-      y1={end.y}
-      x2={middle.x}
-      y2={middle.y}
-      strokeWidth="8"
-      className={end.isCation ? 'stroke-oppose' : 'stroke-bind'}
-    />
-  );
   return (
-    <g opacity={fade(bond.depth) * 0.85}>
-      {half(from)}
-      {half(to)}
+    <g opacity={fade(bond.depth)}>
+      {bond.halves.map(({ from, to, isCation }) => (
+        <line
+          key={String(isCation)}
+          x1={from.x}
+          y1={from.y}
+          x2={to.x}
+          y2={to.y}
+          strokeWidth={0.062 * from.scale}
+          className={isCation ? 'stroke-oppose' : 'stroke-bind'}
+        />
+      ))}
     </g>
   );
 }
@@ -120,7 +137,7 @@ function Ion({ ion }: { ion: DrawnIon }): JSX.Element {
 /** A block of the rock salt structure; decoration only. */
 export function LatticeDrawing({ className }: { className?: string }): JSX.Element {
   return (
-    <svg aria-hidden viewBox="-250 -250 500 500" className={className}>
+    <svg aria-hidden viewBox="-216 -216 432 432" className={className}>
       <defs>
         <radialGradient id="ion-shade" cx="36%" cy="30%" r="78%">
           <stop offset="35%" stopColor="#0d1716" stopOpacity="0" />

@@ -47,7 +47,7 @@ function RoleCell({ member, workspace }: Omit<MemberProps, 'workspaceName'>): JS
       value={changeRole.isPending ? changeRole.variables.role : member.role}
       onChange={change}
       disabled={changeRole.isPending}
-      className="w-44"
+      className="w-48"
     />
   );
 }
@@ -81,9 +81,13 @@ function RemoveCell({ member, workspace, workspaceName }: MemberProps): JSX.Elem
     );
   return (
     <>
-      <Button variant="quiet" size="small" onClick={() => setAsking(true)}>
+      <Button
+        variant="quiet"
+        size="small"
+        aria-label={isMe ? undefined : `Remove ${member.name}`}
+        onClick={() => setAsking(true)}
+      >
         {isMe ? 'Leave' : 'Remove'}
-        {!isMe && <span className="sr-only"> {member.name}</span>}
       </Button>
       <ConfirmDialog
         open={isAsking}
@@ -107,10 +111,10 @@ export function MemberRow(props: MemberProps): JSX.Element {
   const { member } = props;
   const me = useCurrentUser();
   return (
-    <li className="flex flex-wrap items-center gap-x-5 gap-y-2 py-3">
-      <div className="min-w-52 grow">
+    <li className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-5 gap-y-2 py-3 md:grid-cols-[minmax(0,1fr)_9.5rem_12rem_5rem]">
+      <div className="max-md:col-span-2">
         <div className="flex items-center gap-3">
-          <PersonBadge name="" initials={member.initials} />
+          <PersonBadge name={member.name} initials={member.initials} isDecorative />
           <span className="min-w-0">
             <span className="block font-medium">
               {member.name}
@@ -120,11 +124,11 @@ export function MemberRow(props: MemberProps): JSX.Element {
           </span>
         </div>
       </div>
-      <span className="w-40 text-small text-soft max-md:hidden">
+      <span className="text-small text-soft max-md:hidden">
         joined <RelativeTime at={member.joinedAt} />
       </span>
       <RoleCell {...props} />
-      <span className="w-20 text-right">
+      <span className="text-right">
         <RemoveCell {...props} />
       </span>
     </li>

@@ -23,8 +23,8 @@ function Invitation({
   const withdraw = useWithdrawInvitation(workspace);
   const show = useToast();
   return (
-    <li className="flex flex-wrap items-center gap-x-5 gap-y-1 py-3">
-      <span className="min-w-52 grow">
+    <li className="flex items-center gap-5 py-3">
+      <span className="min-w-0 grow">
         <span className="block font-medium">{invitation.email}</span>
         <span className="block text-small text-soft">
           as {invitation.role}, by {invitation.invitedBy}, ends{' '}
@@ -34,6 +34,7 @@ function Invitation({
       <Button
         variant="quiet"
         size="small"
+        aria-label={`Withdraw the invitation of ${invitation.email}`}
         isBusy={withdraw.isPending}
         onClick={() =>
           withdraw.mutate(
@@ -45,7 +46,7 @@ function Invitation({
           )
         }
       >
-        Withdraw<span className="sr-only"> the invitation of {invitation.email}</span>
+        Withdraw
       </Button>
     </li>
   );

@@ -103,7 +103,7 @@ export function StateCell({ lattice }: { lattice: LatticeSummary }): JSX.Element
           {lattice.openRemarks} {lattice.openRemarks === 1 ? 'remark' : 'remarks'}
         </span>
       )}
-      {isEdited && <span className="text-small text-soft">edited</span>}
+      {isEdited && <span className="text-small text-soft max-[1320px]:hidden">edited</span>}
     </span>
   );
 }

@@ -35,6 +35,7 @@ export const shelfColumns = (workspace: string, isDeletedView: boolean) =>
   helper.columns([
     helper.accessor('name', {
       header: 'Name',
+      meta: { className: 'min-w-36 lg:min-w-48' },
       cell: ({ row }) => (
         <NameCell
           lattice={row.original}
@@ -54,7 +55,7 @@ export const shelfColumns = (workspace: string, isDeletedView: boolean) =>
     helper.accessor('prototype', {
       header: 'Structure type',
       enableSorting: false,
-      meta: { className: 'max-wide:hidden' },
+      meta: { className: 'max-[1320px]:hidden' },
       cell: ({ row }) =>
         row.original.prototype === null ? (
           <Missing what="no structure type" />
@@ -72,7 +73,7 @@ export const shelfColumns = (workspace: string, isDeletedView: boolean) =>
     helper.display({
       id: 'madelung',
       header: 'M, reduced',
-      meta: { className: `${numeric} max-lg:hidden` },
+      meta: { className: `${numeric} max-wide:hidden` },
       cell: ({ row }) => <MadelungCell lattice={row.original} />,
     }),
     helper.display({
@@ -88,7 +89,7 @@ export const shelfColumns = (workspace: string, isDeletedView: boolean) =>
     helper.accessor((lattice) => lattice.author.name, {
       id: 'author',
       header: 'Author',
-      meta: { className: 'max-wide:hidden' },
+      meta: { className: 'max-[1320px]:hidden' },
       cell: ({ row }) => <PersonBadge {...row.original.author} />,
     }),
     helper.accessor('updatedAt', {

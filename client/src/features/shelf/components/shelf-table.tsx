@@ -30,7 +30,7 @@ function SortHeader({ title, direction, isEnd, onToggle }: SortHeaderProps): JSX
       type="button"
       onClick={onToggle}
       className={classNames(
-        'group inline-flex items-center gap-1 rounded-control hover:text-ink',
+        'group inline-flex items-center gap-1 rounded-control align-middle hover:text-ink',
         direction !== false && 'font-medium text-ink',
         isEnd && 'flex-row-reverse',
       )}
@@ -82,82 +82,96 @@ function useShelfTable({ workspace, lattices, view, onSort }: ShelfTableProps) {
   });
 }
 
-const cellLook = 'py-2 pr-5 align-middle last:pr-1 first:pl-1';
+type ShelfModel = ReturnType<typeof useShelfTable>;
+type ShelfHeader = ReturnType<ShelfModel['getHeaderGroups']>[number]['headers'][number];
+
+const cellLook = 'py-2 pr-5 align-middle first:pl-2 last:pr-2';
 const ariaSort = { asc: 'ascending', desc: 'descending' } as const;
+
+function Heading({ header: { column } }: { header: ShelfHeader }): JSX.Element {
+  const { header, meta, enableSorting, sortDescFirst } = column.columnDef;
+  const title = String(header ?? '');
+  const direction = column.getIsSorted();
+  const toggle = (): void =>
+    column.toggleSorting(direction === false ? sortDescFirst === true : direction === 'asc');
+  const plain = title === '' ? <span className="sr-only">Actions</span> : title;
+  return (
+    <th
+      scope="col"
+      aria-sort={direction === false ? undefined : ariaSort[direction]}
+      className={classNames(cellLook, 'font-normal whitespace-nowrap', meta?.className)}
+    >
+      {enableSorting === false ? (
+        plain
+      ) : (
+        <SortHeader
+          {...{ title, direction }}
+          isEnd={meta?.className?.includes('text-right') === true}
+          onToggle={toggle}
+        />
+      )}
+    </th>
+  );
+}
+
+function Body({
+  table,
+  onOpen,
+}: {
+  table: ShelfModel;
+  /** Missing where a row can't be opened. */
+  onOpen?: (id: string) => void;
+}): JSX.Element {
+  return (
+    <tbody>
+      {table.getRowModel().rows.map((row) => (
+        <tr
+          key={row.id}
+          onClick={(event) => {
+            if (!isForSomethingElse(event)) {
+              onOpen?.(row.id);
+            }
+          }}
+          className={classNames(
+            'h-13 border-b border-line hover:bg-raised',
+            onOpen !== undefined && 'cursor-pointer',
+          )}
+        >
+          {row.getAllCells().map((cell) => (
+            <td
+              key={cell.id}
+              className={classNames(cellLook, cell.column.columnDef.meta?.className)}
+            >
+              <table.FlexRender cell={cell} />
+            </td>
+          ))}
+        </tr>
+      ))}
+    </tbody>
+  );
+}
 
 /** The shelf as a table: a header sorts, a row opens. */
 export function ShelfTable(props: ShelfTableProps): JSX.Element {
   const { workspace, view, isStale } = props;
   const table = useShelfTable(props);
   const navigate = useNavigate();
-  const open = (event: MouseEvent<HTMLElement>, id: string): void => {
-    if (!view.deleted && !isForSomethingElse(event)) {
-      void navigate(`/w/${workspace}/lattices/${id}`);
-    }
-  };
+  const open = (id: string): void => void navigate(`/w/${workspace}/lattices/${id}`);
   return (
-    <table className={classNames('w-full border-collapse text-left', isStale && 'opacity-60')}>
-      <caption className="sr-only">Lattices of the workspace</caption>
-      <thead className="border-b border-line text-small text-soft">
-        {table.getHeaderGroups().map((group) => (
-          <tr key={group.id}>
-            {group.headers.map(({ id, column }) => {
-              const title = String(column.columnDef.header ?? '');
-              const direction = column.getIsSorted();
-              const className = column.columnDef.meta?.className;
-              return (
-                <th
-                  key={id}
-                  scope="col"
-                  aria-sort={direction === false ? undefined : ariaSort[direction]}
-                  className={classNames(cellLook, 'font-normal', className)}
-                >
-                  {column.columnDef.enableSorting === false ? (
-                    title === '' ? (
-                      <span className="sr-only">Actions</span>
-                    ) : (
-                      title
-                    )
-                  ) : (
-                    <SortHeader
-                      {...{ title, direction }}
-                      isEnd={className?.includes('text-right') === true}
-                      onToggle={() =>
-                        column.toggleSorting(
-                          direction === false
-                            ? column.columnDef.sortDescFirst === true
-                            : direction === 'asc',
-                        )
-                      }
-                    />
-                  )}
-                </th>
-              );
-            })}
-          </tr>
-        ))}
-      </thead>
-      <tbody>
-        {table.getRowModel().rows.map((row) => (
-          <tr
-            key={row.id}
-            onClick={(event) => open(event, row.id)}
-            className={classNames(
-              'h-13 border-b border-line hover:bg-raised',
-              !view.deleted && 'cursor-pointer',
-            )}
-          >
-            {row.getAllCells().map((cell) => (
-              <td
-                key={cell.id}
-                className={classNames(cellLook, cell.column.columnDef.meta?.className)}
-              >
-                <table.FlexRender cell={cell} />
-              </td>
-            ))}
-          </tr>
-        ))}
-      </tbody>
-    </table>
+    <div className="-mx-2 overflow-x-auto">
+      <table className={classNames('w-full border-collapse text-left', isStale && 'opacity-60')}>
+        <caption className="sr-only">Lattices of the workspace</caption>
+        <thead className="border-b border-line text-small text-soft">
+          {table.getHeaderGroups().map((group) => (
+            <tr key={group.id}>
+              {group.headers.map((header) => (
+                <Heading key={header.id} header={header} />
+              ))}
+            </tr>
+          ))}
+        </thead>
+        <Body table={table} onOpen={view.deleted ? undefined : open} />
+      </table>
+    </div>
   );
 }

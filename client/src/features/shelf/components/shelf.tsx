@@ -71,7 +71,8 @@ export function Shelf({ workspace }: { workspace: string }): JSX.Element {
         title={view.deleted ? 'Deleted lattices' : 'Lattices'}
         meta={view.deleted ? 'kept for 30 days, then gone for good' : undefined}
         actions={
-          can('lattice.create') && (
+          can('lattice.create') &&
+          !view.deleted && (
             <ButtonLink to={`/w/${workspace}/new`} variant="primary">
               <Plus aria-hidden className="size-4" />
               New lattice
