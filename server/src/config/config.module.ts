@@ -1,13 +1,14 @@
 import { Global, Module } from '@nestjs/common';
 
-import { readConfig, type AppConfig } from './environment.js';
-
-/** Token of the {@link AppConfig}: `@Inject(APP_CONFIG) config: AppConfig`. */
-export const APP_CONFIG = Symbol('APP_CONFIG');
+import { Clock, SystemClock } from './clock.js';
+import { APP_CONFIG, readConfig, type AppConfig } from './environment.js';
 
 @Global()
 @Module({
-  providers: [{ provide: APP_CONFIG, useFactory: (): AppConfig => readConfig(process.env) }],
-  exports: [APP_CONFIG],
+  providers: [
+    { provide: APP_CONFIG, useFactory: (): AppConfig => readConfig(process.env) },
+    { provide: Clock, useClass: SystemClock },
+  ],
+  exports: [APP_CONFIG, Clock],
 })
 export class ConfigModule {}

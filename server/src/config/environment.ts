@@ -31,6 +31,9 @@ const environment = z.object({
   HOLDFAST_TRUST_PROXY: z.coerce.number().int().min(0).max(10).default(0),
 });
 
+/** Token of the {@link AppConfig}: `@Inject(APP_CONFIG) config: AppConfig`. */
+export const APP_CONFIG = Symbol('APP_CONFIG');
+
 /** The settings of one running server, read from the environment once. */
 export interface AppConfig {
   readonly isProduction: boolean;

@@ -1,8 +1,7 @@
 import { Global, Inject, Logger, Module, type OnApplicationShutdown } from '@nestjs/common';
 import { Pool } from 'pg';
 
-import { APP_CONFIG } from '#server/config/config.module';
-import type { AppConfig } from '#server/config/environment';
+import { APP_CONFIG, type AppConfig } from '#server/config/environment';
 
 import { DATABASE, DATABASE_POOL, openDatabase } from './database.js';
 import { migrateDatabase } from './migrate.js';

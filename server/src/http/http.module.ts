@@ -4,13 +4,11 @@ import { ThrottlerGuard, ThrottlerModule } from '@nestjs/throttler';
 
 import { AccessGuard } from './access.guard.js';
 import { ProblemFilter } from './problem.filter.js';
+import { generalThrottle } from './rate-limits.js';
 import { createValidationPipe } from './validation.js';
 
-/** Requests a minute from one address; a person who types fast makes about a hundred. */
-const requestsPerMinute = 1200;
-
 @Module({
-  imports: [ThrottlerModule.forRoot([{ ttl: 60_000, limit: requestsPerMinute }])],
+  imports: [ThrottlerModule.forRoot(generalThrottle)],
   providers: [
     { provide: APP_FILTER, useClass: ProblemFilter },
     { provide: APP_PIPE, useFactory: createValidationPipe },

@@ -1,0 +1,30 @@
+import { Module } from '@nestjs/common';
+import { ScheduleModule } from '@nestjs/schedule';
+
+import { AuditModule } from '#server/audit/audit.module';
+import { AuthModule } from '#server/auth/auth.module';
+import { ConfigModule } from '#server/config/config.module';
+import { DatabaseModule } from '#server/database/database.module';
+import { HealthModule } from '#server/health/health.module';
+import { HttpModule } from '#server/http/http.module';
+import { StaticClientModule } from '#server/http/static-client.module';
+import { InstallationModule } from '#server/installation/installation.module';
+import { UsersModule } from '#server/users/users.module';
+import { WorkspacesModule } from '#server/workspaces/workspaces.module';
+
+@Module({
+  imports: [
+    ConfigModule,
+    DatabaseModule,
+    HttpModule,
+    ScheduleModule.forRoot(),
+    HealthModule,
+    InstallationModule,
+    UsersModule,
+    AuditModule,
+    AuthModule,
+    WorkspacesModule,
+    StaticClientModule,
+  ],
+})
+export class AppModule {}
