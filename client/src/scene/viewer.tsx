@@ -1,11 +1,14 @@
-import { useCallback, type JSX } from 'react';
+import { useCallback, useState, type JSX } from 'react';
 
+import { useMedia } from '#client/lib/use-media.ts';
 import type { ResolvedCell } from '#common/physics/resolved-cell';
 
 import type { Repeat } from './model/block.ts';
 import type { SceneTheme } from './model/colours.ts';
 import type { LitPairKind } from './model/lit-pairs.ts';
 import { defaultSceneView, type SceneView } from './model/scene-view.ts';
+import { Compass } from './stage/compass.tsx';
+import { StageFrames } from './stage/frames.ts';
 import type { ScenePin } from './stage/pins-layer.tsx';
 import { Stage } from './stage/stage.tsx';
 import { ToolRow } from './stage/tool-row.tsx';
@@ -46,11 +49,19 @@ export function LatticeViewer(props: LatticeViewerProps): JSX.Element {
   const store = useViewStore(props.view, props.onViewChange);
   const scene = useScene(props);
   const { vectorsA } = props.cell;
-  const onReset = useCallback(() => store.glideTo(defaultSceneView), [store]);
+  const onReset = useCallback(() => store.glideToFitted(defaultSceneView), [store]);
+  const [frames] = useState(() => new StageFrames());
+  // A small stage has no corner to spare: the compass then stands below it.
+  const isNarrow = useMedia('(max-width: 559px)');
+  const compass = (className: string): JSX.Element => (
+    <Compass frames={frames} store={store} vectorsA={vectorsA} className={className} />
+  );
   const isRepeatCut = scene.repeat.some((count, axis) => count !== props.repeat[axis]);
   return (
     <div className="flex h-full min-h-0 min-w-0 flex-col">
-      <Stage {...props} store={store} scene={scene} onReset={onReset} />
+      <Stage {...props} store={store} frames={frames} scene={scene} onReset={onReset}>
+        {!isNarrow && compass('absolute top-2 right-2 size-18')}
+      </Stage>
       <ToolRow
         store={store}
         vectorsA={vectorsA}
@@ -63,7 +74,9 @@ export function LatticeViewer(props: LatticeViewerProps): JSX.Element {
         onSignMarksChange={props.onSignMarksChange}
         onFreeView={onReset}
         onReset={onReset}
-      />
+      >
+        {isNarrow && compass('ml-auto size-14')}
+      </ToolRow>
     </div>
   );
 }

@@ -107,6 +107,21 @@ export function positionAt(block: Block, index: number): Vector {
   return [block.positionsA[at]!, block.positionsA[at + 1]!, block.positionsA[at + 2]!];
 }
 
+/** Ions are never drawn smaller than this, Å: they stay visible and can be picked. */
+const leastRadiusA = 0.12;
+
+/** Radius an ion is drawn with, Å. */
+export function drawnRadiusA(block: Block, index: number, ionScale: number): number {
+  return Math.max(leastRadiusA, block.radiiA[index]! * ionScale);
+}
+
+/** The eight corners of the block, Å. */
+export function blockCorners({ repeat: [na, nb, nc], vectorsA }: Block): Vector[] {
+  return [0, na].flatMap((i) =>
+    [0, nb].flatMap((j) => [0, nc].map((k) => placeAt(vectorsA, i, j, k))),
+  );
+}
+
 /**
  * Radius around the block's middle that holds every ion (at a fraction of its radius) and
  * every cell corner, Å.
@@ -116,17 +131,11 @@ export function boundRadiusA(block: Block, ionScale: number): number {
   let radius = 0;
   for (let index = 0; index < block.count; index += 1) {
     const [x, y, z] = positionAt(block, index);
-    const reach = Math.hypot(x - cx, y - cy, z - cz) + block.radiiA[index]! * ionScale;
+    const reach = Math.hypot(x - cx, y - cy, z - cz) + drawnRadiusA(block, index, ionScale);
     radius = Math.max(radius, reach);
   }
-  const [na, nb, nc] = block.repeat;
-  for (const i of [0, na]) {
-    for (const j of [0, nb]) {
-      for (const k of [0, nc]) {
-        const [x, y, z] = placeAt(block.vectorsA, i, j, k);
-        radius = Math.max(radius, Math.hypot(x - cx, y - cy, z - cz));
-      }
-    }
+  for (const [x, y, z] of blockCorners(block)) {
+    radius = Math.max(radius, Math.hypot(x - cx, y - cy, z - cz));
   }
   return radius || 1;
 }

@@ -1,5 +1,5 @@
-import type { Block } from './block.ts';
-import { placeAt, type Vector } from './vector.ts';
+import { drawnRadiusA, positionAt, type Block } from './block.ts';
+import { addScaled, dot, placeAt, subtract, type Vector } from './vector.ts';
 
 export interface CellEdge {
   readonly from: Vector;
@@ -40,4 +40,71 @@ function edgesAlong(block: Block, axis: 0 | 1 | 2): CellEdge[] {
 /** Edges of every cell of the block, each drawn once. */
 export function cellEdges(block: Block): CellEdge[] {
   return axes.flatMap((axis) => edgesAlong(block, axis));
+}
+
+/** Above this many comparisons edges stay whole: they are faint and many by then. */
+const trimLimit = 4_000_000;
+
+interface Gap {
+  readonly first: number;
+  readonly last: number;
+}
+
+/** Part of an edge that a ball covers, in shares of the edge; null where they don't meet. */
+function gapOf(from: Vector, along: Vector, centre: Vector, radius: number): Gap | null {
+  const squared = dot(along, along);
+  const offset = subtract(centre, from);
+  const middle = dot(offset, along) / squared;
+  const missSquared = dot(offset, offset) - middle * middle * squared;
+  if (missSquared >= radius * radius) {
+    return null;
+  }
+  const half = Math.sqrt((radius * radius - missSquared) / squared);
+  return middle + half <= 0 || middle - half >= 1
+    ? null
+    : { first: middle - half, last: middle + half };
+}
+
+function openParts(edge: CellEdge, gaps: Gap[]): CellEdge[] {
+  const along = subtract(edge.to, edge.from);
+  const parts: CellEdge[] = [];
+  let start = 0;
+  for (const { first, last } of [
+    ...gaps.sort((a, b) => a.first - b.first),
+    { first: 1, last: 1 },
+  ]) {
+    if (first > start + 1e-6) {
+      const from = addScaled(edge.from, along, start);
+      parts.push({ ...edge, from, to: addScaled(edge.from, along, first) });
+    }
+    start = Math.max(start, last);
+  }
+  return parts;
+}
+
+/** The parts of the edges that run outside the ions, so that no line pierces one. */
+export function trimmedEdges(
+  edges: readonly CellEdge[],
+  block: Block,
+  ionScale: number,
+): readonly CellEdge[] {
+  if (edges.length * block.count > trimLimit) {
+    return edges;
+  }
+  return edges.flatMap((edge) => {
+    const along = subtract(edge.to, edge.from);
+    const gaps: Gap[] = [];
+    for (let index = 0; index < block.count; index += 1) {
+      const gap = gapOf(
+        edge.from,
+        along,
+        positionAt(block, index),
+        drawnRadiusA(block, index, ionScale),
+      );
+      if (gap !== null) {
+        gaps.push(gap);
+      }
+    }
+    return openParts(edge, gaps);
+  });
 }

@@ -15,10 +15,10 @@ const families: Record<SceneTheme, { cation: readonly string[]; anion: readonly 
 };
 const neutral: Record<SceneTheme, string> = { light: '#9A9A8E', dark: '#B9B9AC' };
 
-/** Grounds and inks of the stage; the same values as the style sheet's tokens. */
-export const stageInks: Record<SceneTheme, { paper: string; wash: string; ink: string }> = {
-  light: { paper: '#F7F5F0', wash: '#EFECE4', ink: '#18211F' },
-  dark: { paper: '#101817', wash: '#151F1D', ink: '#EEF1EC' },
+/** Grounds and inks of the stage; paper and ink as the style sheet's tokens. */
+export const stageInks: Record<SceneTheme, { paper: string; foot: string; ink: string }> = {
+  light: { paper: '#F7F5F0', foot: '#EAE6DB', ink: '#18211F' },
+  dark: { paper: '#101817', foot: '#182321', ink: '#EEF1EC' },
 };
 
 export type Rgb = readonly [number, number, number];

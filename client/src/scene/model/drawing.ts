@@ -1,4 +1,4 @@
-import { positionAt, type Block } from './block.ts';
+import { drawnRadiusA, positionAt, type Block } from './block.ts';
 import type { Bond } from './bonds.ts';
 import type { CellEdge } from './cell-edges.ts';
 import { parseHex, type Rgb } from './colours.ts';
@@ -40,15 +40,15 @@ export interface RibbonBatch {
   readonly biasA: number;
 }
 
-export const strutRadiusA = 0.11;
+export const strutRadiusA = 0.095;
 /** Struts are this much slimmer halfway. */
-export const strutTaper = 0.4;
+export const strutTaper = 0.26;
 
 export function sphereBatch(block: Block, ionScale: number, signMarks: boolean): SphereBatch {
   return {
     count: block.count,
     centresA: Float32Array.from(block.positionsA),
-    radiiA: Float32Array.from(block.radiiA, (radius) => Math.max(0.12, radius * ionScale)),
+    radiiA: Float32Array.from(block.radiiA, (_, index) => drawnRadiusA(block, index, ionScale)),
     colours: Uint8Array.from(block.speciesOf, (kind) => kind % 256),
     signs: Int8Array.from(block.chargesE, (charge) => (signMarks ? Math.sign(charge) : 0)),
   };
@@ -87,7 +87,7 @@ export function strutBatch(
   const colours = new Uint8Array(bonds.length * 2);
   let count = 0;
   for (const bond of bonds) {
-    if (writeTrimmed(endsA, count * 6, block, spheres, bond, 0.96)) {
+    if (writeTrimmed(endsA, count * 6, block, spheres, bond, 0.86)) {
       colours[count * 2] = spheres.colours[bond.from]!;
       colours[count * 2 + 1] = spheres.colours[bond.to]!;
       count += 1;

@@ -1,4 +1,4 @@
-import { positionAt, type Block } from './block.ts';
+import { drawnRadiusA, positionAt, type Block } from './block.ts';
 import type { CellEdge } from './cell-edges.ts';
 import type { Projection } from './projection.ts';
 import { addScaled, subtract, type Vector } from './vector.ts';
@@ -27,7 +27,7 @@ function discsOf(block: Block, ionScale: number, projection: Projection): Disc[]
   const step = Math.max(1, Math.floor(block.count / 1500));
   for (let index = 0; index < block.count; index += step) {
     const { x, y, depthA } = projection.toStage(positionAt(block, index));
-    const radius = projection.toPixels(block.radiiA[index]! * ionScale, depthA);
+    const radius = projection.toPixels(drawnRadiusA(block, index, ionScale), depthA);
     discs.push({ x, y, radius, depthA });
   }
   return discs;

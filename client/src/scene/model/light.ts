@@ -16,11 +16,21 @@ export const light = {
   wrap: 0.22,
   sky: 0.07,
   rim: 0.16,
-  gloss: 0.3,
-  glossPower: 46,
-  sheen: 0.12,
+  gloss: 0.32,
+  glossPower: 52,
+  sheen: 0.075,
   sheenPower: 9,
 } as const;
+
+/** The pool of the ground's colour under the block: shares of the stage's width and height. */
+export const ground = { middle: 0.8, width: 0.47, height: 0.19 } as const;
+
+/** Strength of the ground's colour at a place of the stage, given as shares of its size. */
+export function groundAt(x: number, y: number): number {
+  const across = (x - 0.5) / ground.width;
+  const down = (y - ground.middle) / ground.height;
+  return Math.max(0, 1 - across * across - down * down) ** 2;
+}
 
 /** Share of the paper's colour at the far end of the block. */
 export const farFade = 0.66;

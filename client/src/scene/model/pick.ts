@@ -1,4 +1,4 @@
-import type { Block } from './block.ts';
+import { drawnRadiusA, type Block } from './block.ts';
 import type { Vector } from './vector.ts';
 
 /**
@@ -35,7 +35,7 @@ export function pickIon(
   for (let index = 0; index < block.count; index += 1) {
     const at = index * 3;
     const centre: Vector = [p[at]!, p[at + 1]!, p[at + 2]!];
-    const distance = rayBall(origin, direction, centre, block.radiiA[index]! * ionScale);
+    const distance = rayBall(origin, direction, centre, drawnRadiusA(block, index, ionScale));
     if (distance !== null && distance < bestDistance) {
       best = index;
       bestDistance = distance;

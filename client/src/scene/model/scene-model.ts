@@ -2,7 +2,7 @@ import type { ResolvedCell } from '#common/physics/resolved-cell';
 
 import { boundRadiusA, buildBlock, type Block, type Repeat } from './block.ts';
 import { findBonds, type Bond } from './bonds.ts';
-import { cellEdges, type CellEdge } from './cell-edges.ts';
+import { cellEdges, trimmedEdges, type CellEdge } from './cell-edges.ts';
 import { speciesColours, stageInks, type SceneTheme } from './colours.ts';
 import {
   edgeBatch,
@@ -62,16 +62,21 @@ export function buildSolids(
 }
 
 /** Edges of the first cell in ink; those of the other cells fainter. */
-export function buildEdges({ edges }: BlockModel, theme: SceneTheme): RibbonBatch[] {
+export function buildEdges(
+  { block, edges }: BlockModel,
+  ionScale: number,
+  theme: SceneTheme,
+): RibbonBatch[] {
   const style = {
     widthPx: 1.25,
     colour: stageInks[theme].ink,
     hiddenOpacity: 0,
     isDotted: false,
-    biasA: strutRadiusA * 1.6,
+    biasA: strutRadiusA * 1.3,
   };
-  const first = edges.filter(({ isFirstCell }) => isFirstCell);
-  const others = edges.filter(({ isFirstCell }) => !isFirstCell);
+  const open = trimmedEdges(edges, block, ionScale);
+  const first = open.filter(({ isFirstCell }) => isFirstCell);
+  const others = open.filter(({ isFirstCell }) => !isFirstCell);
   return [
     edgeBatch(first, { ...style, opacity: 0.72 }),
     ...(others.length === 0 ? [] : [edgeBatch(others, { ...style, opacity: 0.22 })]),
@@ -89,7 +94,7 @@ export function buildLitPairs(
     widthPx: 3,
     colour: stageInks[theme].ink,
     opacity: 1,
-    hiddenOpacity: 0.3,
+    hiddenOpacity: 0.45,
     isDotted: true,
     biasA: strutRadiusA * 1.8,
   });

@@ -23,9 +23,9 @@ export const defaultSceneView: SceneView = {
 
 export const zoomLimits = { least: 0.35, most: 14 } as const;
 /** Vertical opening of the eye, degrees. */
-export const openingDeg = 30;
+export const openingDeg = 25;
 /** Share of the shorter side that the block's sphere may fill at zoom 1. */
-const fill = 0.97;
+export const fill = 0.97;
 
 /** Unit vectors of the viewer's frame. */
 export interface ViewFrame {

@@ -70,7 +70,7 @@ function tubeInto(geometry: BufferGeometry): void {
       if (along < lengthSteps) {
         const here = along * roundSteps + round;
         const next = along * roundSteps + ((round + 1) % roundSteps);
-        index.push(here, next, here + roundSteps, next, next + roundSteps, here + roundSteps);
+        index.push(here, here + roundSteps, next, next, here + roundSteps, next + roundSteps);
       }
     }
   }

@@ -23,7 +23,7 @@ export interface LatticePartsProps extends Omit<ViewRigProps, 'uniforms' | 'boun
 export function LatticeParts(props: LatticePartsProps): JSX.Element {
   const { solids, edges, litPairs, palette, paper, foot } = props;
   const invalidate = useThree((state) => state.invalidate);
-  const uniforms = useMemo(createUniforms, []);
+  const uniforms = useMemo(() => createUniforms(), []);
   useLayoutEffect(() => {
     uniforms.uPaper.value.copy(displayColour(paper));
     uniforms.uFoot.value.copy(displayColour(foot));

@@ -1,6 +1,15 @@
-import { Color, ShaderMaterial, Vector2, type IUniform } from 'three';
+import {
+  Color,
+  CustomBlending,
+  OneFactor,
+  ShaderMaterial,
+  Vector2,
+  ZeroFactor,
+  type IUniform,
+} from 'three';
 
 import { strutTaper } from '../model/drawing.ts';
+import { ground } from '../model/light.ts';
 import { lightChunk } from './shader-light.ts';
 
 /** Values all materials of a scene share, so that setting them once reaches every part. */
@@ -83,8 +92,8 @@ float bar(vec2 offset, vec2 halfSize) {
   return inside.x * inside.y;
 }
 float mark(vec2 offset) {
-  float arm = vRadiusPx * 0.4;
-  float thick = max(0.7, vRadiusPx * 0.095);
+  float arm = vRadiusPx * 0.3;
+  float thick = max(0.7, vRadiusPx * 0.075);
   float level = bar(offset, vec2(arm, thick));
   return vSign > 0.0 ? max(level, bar(offset, vec2(thick, arm))) : level;
 }
@@ -154,7 +163,7 @@ varying float vDepth;
 void main() {
   vec2 tone = shade(normalize(vNormal));
   float fromEnd = min(vAlong, 1.0 - vAlong);
-  tone.x *= fromEnd < 0.2 ? 0.68 + 1.6 * fromEnd : 1.0;
+  tone.x *= fromEnd < 0.2 ? 0.8 + fromEnd : 1.0;
   vec3 colour = mix(vStartColour, vFinishColour, smoothstep(0.34, 0.66, vAlong));
   gl_FragColor = vec4(lit(colour, tone, fadeAt(vDepth)), 1.0);
 }
@@ -211,9 +220,9 @@ void main() {
 `;
 
 const groundVertex = /* glsl */ `
-varying float vHeight;
+varying vec2 vPlace;
 void main() {
-  vHeight = 0.5 - position.y * 0.5;
+  vPlace = vec2(position.x, -position.y) * 0.5 + 0.5;
   gl_Position = vec4(position.xy, 1.0, 1.0);
 }
 `;
@@ -221,10 +230,11 @@ void main() {
 const groundFragment = /* glsl */ `
 uniform vec3 uPaper;
 uniform vec3 uFoot;
-varying float vHeight;
+varying vec2 vPlace;
 void main() {
-  float share = pow(max(0.0, (vHeight - 0.55) / 0.45), 1.5);
-  gl_FragColor = vec4(mix(uPaper, uFoot, share), 1.0);
+  vec2 away = (vPlace - vec2(0.5, ${ground.middle})) / vec2(${ground.width}, ${ground.height});
+  float near = max(0.0, 1.0 - dot(away, away));
+  gl_FragColor = vec4(mix(uPaper, uFoot, near * near), 1.0);
 }
 `;
 
@@ -235,6 +245,12 @@ export function createSphereMaterial(uniforms: SceneUniforms): ShaderMaterial {
     vertexShader: sphereVertex,
     fragmentShader: sphereFragment,
     alphaToCoverage: true,
+    // The rim's alpha is for the sample mask only; the canvas itself stays opaque.
+    blending: CustomBlending,
+    blendSrc: OneFactor,
+    blendDst: ZeroFactor,
+    blendSrcAlpha: OneFactor,
+    blendDstAlpha: OneFactor,
     toneMapped: false,
   });
 }

@@ -16,12 +16,9 @@ export function createBuffer(width: number, height: number, memory?: ArrayBuffer
   return { width, height, pixels, depths: new Float32Array(width * height) };
 }
 
-/** Fills the picture with the ground: the paper, a shade lighter or deeper toward its foot. */
-export function clearBuffer(buffer: RasterBuffer, ground: Uint32Array): void {
-  const { width, height, pixels, depths } = buffer;
-  for (let y = 0; y < height; y += 1) {
-    pixels.fill(ground[y]!, y * width, (y + 1) * width);
-  }
+/** Fills the picture with the ground, as large as the picture, and clears the depths. */
+export function clearBuffer({ pixels, depths }: RasterBuffer, ground: Uint32Array): void {
+  pixels.set(ground);
   depths.fill(Infinity);
 }
 

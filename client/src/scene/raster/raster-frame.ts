@@ -1,6 +1,6 @@
-import { parseHex, type Rgb } from '../model/colours.ts';
+import { mix, parseHex, type Rgb } from '../model/colours.ts';
 import type { RibbonBatch, SphereBatch, StrutBatch } from '../model/drawing.ts';
-import { fadeAt } from '../model/light.ts';
+import { fadeAt, groundAt } from '../model/light.ts';
 import { clearBuffer, pack, type RasterBuffer } from './raster-buffer.ts';
 import { dotSpacing, drawRibbon, type ScreenRibbon } from './raster-ribbon.ts';
 import { drawBall, drawHalo, drawMark, type ScreenBall } from './raster-sphere.ts';
@@ -84,7 +84,7 @@ export class Rasteriser {
   }
 
   private readInks(buffer: RasterBuffer, scene: RasterScene): void {
-    const key = [scene.paper, scene.foot, buffer.height, ...scene.palette].join();
+    const key = [scene.paper, scene.foot, buffer.width, buffer.height, ...scene.palette].join();
     if (key === this.inkKey) {
       return;
     }
@@ -92,7 +92,7 @@ export class Rasteriser {
     this.palettes.clear();
     this.colours = scene.palette.map(parseHex);
     this.paper = parseHex(scene.paper);
-    this.ground = groundRows(this.paper, parseHex(scene.foot), buffer.height);
+    this.ground = groundPixels(this.paper, parseHex(scene.foot), buffer.width, buffer.height);
   }
 
   private readView({ view }: RasterCamera): void {
@@ -284,11 +284,16 @@ export class Rasteriser {
 /** Raised marks are nearly white in both themes: they stand on coloured balls. */
 const markColour = pack(252, 251, 247);
 
-/** Paper above the horizon, deepening a little toward the foot. */
-function groundRows(paper: Rgb, foot: Rgb, height: number): Uint32Array {
-  return Uint32Array.from({ length: height }, (_, y) => {
-    const share = Math.max(0, (y / height - 0.55) / 0.45) ** 1.5;
-    const at = (i: 0 | 1 | 2): number => paper[i] + (foot[i] - paper[i]) * share;
-    return pack(at(0), at(1), at(2));
-  });
+/** The paper, with a pool of the ground's colour under the block. */
+function groundPixels(paper: Rgb, foot: Rgb, width: number, height: number): Uint32Array {
+  const pixels = new Uint32Array(width * height).fill(pack(...paper));
+  for (let y = 0; y < height; y += 1) {
+    for (let x = 0; x < width; x += 1) {
+      const share = groundAt((x + 0.5) / width, (y + 0.5) / height);
+      if (share > 0) {
+        pixels[y * width + x] = pack(...mix(paper, foot, share));
+      }
+    }
+  }
+  return pixels;
 }

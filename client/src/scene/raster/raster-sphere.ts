@@ -35,19 +35,22 @@ function drawRow(
   const last = clip(Math.ceil(cx + reach) - 1, width);
   const innerSquared = r > 0.7 ? (r - 0.7) * (r - 0.7) : 0;
   const scale = size / 2 / r;
+  const soft = radiusA / r;
   const row = clip(Math.floor(size / 2 + dy * scale), size) * size;
   for (let x = first; x <= last; x += 1) {
     const dx = x + 0.5 - cx;
     const at = y * width + x;
     const entry = row + clip((size / 2 + dx * scale) | 0, size);
     const depth = depthA - heights[entry]! * radiusA;
-    if (depth >= depths[at]!) {
+    const ahead = depths[at]! - depth;
+    if (ahead <= 0) {
       continue;
     }
     const squared = dx * dx + dy * dy;
     const colour = palette[tones[entry]!]!;
     if (squared <= innerSquared) {
-      pixels[at] = colour;
+      // Where surfaces meet within a pixel they share it.
+      pixels[at] = ahead < soft ? blend(pixels[at]!, colour, ((ahead / soft) * 256) | 0) : colour;
       depths[at] = depth;
       continue;
     }
@@ -76,7 +79,7 @@ export function drawBall(buffer: RasterBuffer, ball: ScreenBall, palette: Uint32
 
 /** How far contact shading reaches beyond a ball, in its radii, and how deep it is. */
 const haloReach = 0.42;
-const haloDepth = 0.34;
+const haloDepth = 0.3;
 /** Things farther behind than this many radii are not touched. */
 const haloFarRadii = 5;
 
@@ -102,7 +105,9 @@ export function drawHalo(buffer: RasterBuffer, ball: ScreenBall): void {
       const away = (Math.sqrt(dx * dx + dy * dy) - r) / (r * haloReach);
       if (away < 1) {
         const edge = 1 - (away < 0 ? 0 : away);
-        const strength = haloDepth * edge * edge * (1 - behind / far);
+        // What crosses the ball's middle plane is hardly behind it yet.
+        const apart = Math.min(1, behind / (0.8 * radiusA));
+        const strength = haloDepth * edge * edge * apart * (1 - behind / far);
         pixels[at] = darken(pixels[at]!, (256 * (1 - strength)) | 0);
       }
     }
@@ -110,8 +115,8 @@ export function drawHalo(buffer: RasterBuffer, ball: ScreenBall): void {
 }
 
 /** Half length and half thickness of a mark's arms, in radii of its ball. */
-const armLength = 0.4;
-const armThickness = 0.095;
+const armLength = 0.3;
+const armThickness = 0.075;
 
 /** Cover of a pixel by a bar of the given half sizes around the ball's middle, 0 … 1. */
 function barCover(dx: number, dy: number, halfX: number, halfY: number): number {

@@ -4,9 +4,9 @@ import { pack } from './raster-buffer.ts';
 
 /** A tone is a step of brightness and a step of gloss in one number. */
 const bodySteps = 128;
-const glossSteps = 16;
+const glossSteps = 64;
 const bodyRange = 1.25;
-const glossRange = 0.5;
+const glossRange = 0.45;
 export const toneCount = bodySteps * glossSteps;
 
 function toneOf(nx: number, ny: number, nz: number): number {

@@ -8,6 +8,7 @@ interface CompassProps {
   frames: StageFrames;
   store: ViewStore;
   vectorsA: readonly number[];
+  className: string;
 }
 
 const axes: readonly ViewAxis[] = ['a', 'b', 'c'];
@@ -15,7 +16,7 @@ const needlePx = 22;
 const letterPx = 30;
 
 /** A disc with the directions of a, b, c in ink; a letter looks down its axis. */
-export function Compass({ frames, store, vectorsA }: CompassProps): JSX.Element {
+export function Compass({ frames, store, vectorsA, className }: CompassProps): JSX.Element {
   const disc = useRef<SVGSVGElement>(null);
   useOnFrame(frames, () => {
     const frame = viewFrame(store.view);
@@ -38,7 +39,7 @@ export function Compass({ frames, store, vectorsA }: CompassProps): JSX.Element 
       data-overlay
       aria-hidden
       viewBox="-42 -42 84 84"
-      className="absolute top-2 right-2 size-18 select-none"
+      className={`select-none ${className}`}
     >
       <circle r="40" className="fill-paper stroke-line" fillOpacity={0.8} />
       <circle r="2" className="fill-ink" />
@@ -46,7 +47,7 @@ export function Compass({ frames, store, vectorsA }: CompassProps): JSX.Element 
         <g
           key={axis}
           className="cursor-pointer"
-          onClick={() => store.glideTo(viewDown(vectorsA, axis))}
+          onClick={() => store.glideToFitted(viewDown(vectorsA, axis))}
         >
           <line className="stroke-ink" strokeWidth={1.5} strokeLinecap="round" />
           <text

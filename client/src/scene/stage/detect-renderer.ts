@@ -5,14 +5,8 @@ const imitation = /swiftshader|llvmpipe|softpipe|software|basic render|lavapipe/
 
 function probe(): RendererKind {
   const canvas = document.createElement('canvas');
-  let context: WebGL2RenderingContext | null = null;
-  try {
-    context = canvas.getContext('webgl2', { failIfMajorPerformanceCaveat: true });
-  } catch {
-    // Some browsers throw where WebGL is switched off; the processor draws then.
-    return 'cpu';
-  }
-  if (!(context instanceof Object) || typeof context.getExtension !== 'function') {
+  const context = canvas.getContext('webgl2', { failIfMajorPerformanceCaveat: true });
+  if (context === null) {
     return 'cpu';
   }
   const info = context.getExtension('WEBGL_debug_renderer_info');
@@ -29,6 +23,6 @@ export function detectRenderer(): RendererKind {
   if (wanted === 'cpu' || wanted === 'webgl') {
     return wanted;
   }
-  detected ??= probe();
+  detected ??= typeof WebGL2RenderingContext === 'undefined' ? 'cpu' : probe();
   return detected;
 }

@@ -1,6 +1,6 @@
 import { useRef, type JSX } from 'react';
 
-import { positionAt } from '../model/block.ts';
+import { drawnRadiusA, positionAt } from '../model/block.ts';
 import type { BlockModel } from '../model/scene-model.ts';
 import { useOnFrame, type StageFrames } from './frames.ts';
 
@@ -29,7 +29,7 @@ export function HoverTag({
       return;
     }
     const { x, y, depthA } = projection.toStage(positionAt(model.block, ion));
-    const away = projection.toPixels(model.block.radiiA[ion]! * ionScale, depthA) + gapPx;
+    const away = projection.toPixels(drawnRadiusA(model.block, ion, ionScale), depthA) + gapPx;
     const width = element.offsetWidth;
     const isRight = x + away + width < projection.width - 4;
     const left = isRight ? x + away : Math.max(4, x - away - width);

@@ -1,5 +1,6 @@
 import { useMemo, useRef, type JSX } from 'react';
 
+import { drawnRadiusA } from '../model/block.ts';
 import { pinAnchor, type PinSubject } from '../model/pins.ts';
 import type { BlockModel } from '../model/scene-model.ts';
 import { useOnFrame, type StageFrames } from './frames.ts';
@@ -44,7 +45,7 @@ export function PinsLayer(props: PinsLayerProps): JSX.Element {
         return;
       }
       const { x, y, depthA } = projection.toStage(anchor.at);
-      const radiusA = anchor.ion === null ? 0 : model.block.radiiA[anchor.ion]! * ionScale;
+      const radiusA = anchor.ion === null ? 0 : drawnRadiusA(model.block, anchor.ion, ionScale);
       const rim = projection.toPixels(radiusA, depthA) * 0.62;
       const left = x + rim + order * stepPx;
       element.style.transform = `translate(${left}px, ${y - rim}px) translate(-3px, -100%)`;

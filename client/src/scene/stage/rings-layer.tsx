@@ -1,6 +1,6 @@
 import { useRef, type JSX } from 'react';
 
-import { positionAt } from '../model/block.ts';
+import { drawnRadiusA, positionAt } from '../model/block.ts';
 import type { BlockModel } from '../model/scene-model.ts';
 import { useOnFrame, type StageFrames } from './frames.ts';
 
@@ -25,7 +25,8 @@ export function RingsLayer({ frames, model, ionScale, picked }: RingsLayerProps)
         return;
       }
       const { x, y, depthA } = projection.toStage(positionAt(model.block, index));
-      const radiusPx = projection.toPixels(model.block.radiiA[index]! * ionScale, depthA) + gapPx;
+      const radiusPx =
+        projection.toPixels(drawnRadiusA(model.block, index, ionScale), depthA) + gapPx;
       for (const circle of ring.children) {
         circle.setAttribute('cx', x.toFixed(1));
         circle.setAttribute('cy', y.toFixed(1));

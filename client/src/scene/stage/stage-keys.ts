@@ -74,7 +74,7 @@ function act(event: KeyboardEvent, options: StageKeysOptions): boolean {
     case 'a':
     case 'b':
     case 'c':
-      store.glideTo(viewDown(model.block.vectorsA, event.key satisfies ViewAxis));
+      store.glideToFitted(viewDown(model.block.vectorsA, event.key satisfies ViewAxis));
       return true;
     case 'Home':
     case '0':

@@ -1,29 +1,32 @@
-import { useCallback, useId, useRef, useState, type JSX } from 'react';
+import { useCallback, useId, useRef, useState, type JSX, type ReactNode } from 'react';
 
 import { pickIon } from '../model/pick.ts';
 import { viewPose } from '../model/scene-view.ts';
 import type { LatticeViewerProps } from '../viewer.tsx';
-import { Compass } from './compass.tsx';
 import { detectRenderer, type RendererKind } from './detect-renderer.ts';
 import { EdgeLettersLayer } from './edge-letters-layer.tsx';
-import { StageFrames } from './frames.ts';
+import type { StageFrames } from './frames.ts';
 import { HoverTag } from './hover-tag.tsx';
 import { PinsLayer } from './pins-layer.tsx';
 import { RingsLayer } from './rings-layer.tsx';
 import { StageCanvas } from './stage-canvas.tsx';
 import { handleStageKey, keysText } from './stage-keys.ts';
 import type { useScene } from './use-scene.ts';
+import { useFit } from './use-fit.ts';
 import { useStagePointer } from './use-stage-pointer.ts';
 import type { ViewStore } from './view-store.ts';
 
 interface StageProps extends LatticeViewerProps {
   store: ViewStore;
+  frames: StageFrames;
   scene: ReturnType<typeof useScene>;
   onReset: () => void;
+  /** Laid over the picture. */
+  children?: ReactNode;
 }
 
 /** Picking by the ray through a point of the stage. */
-function usePick({ store, scene, ionScale }: StageProps, frames: StageFrames) {
+function usePick({ store, frames, scene, ionScale }: StageProps) {
   return (x: number, y: number): number | null => {
     const projection = frames.latest;
     if (projection === null) {
@@ -61,16 +64,16 @@ function spokenSelection({ selectedIonIds, describeIon }: StageProps): string {
 
 /** The picture with everything laid over it: one focusable element. */
 export function Stage(props: StageProps): JSX.Element {
-  const { store, scene, ionScale, describeIon, selectedIonIds, onSelectionChange } = props;
+  const { store, frames, scene, ionScale, describeIon, selectedIonIds, onSelectionChange } = props;
   const { model, picked } = scene;
   const element = useRef<HTMLDivElement>(null);
-  const [frames] = useState(() => new StageFrames());
   const [kind, setKind] = useState<RendererKind>(detectRenderer);
   const [hovered, setHovered] = useState<number | null>(null);
-  const pick = usePick(props, frames);
+  const pick = usePick(props);
   const helpId = useId();
   const frameCount = useRef(0);
 
+  useFit(element, store, { block: model.block, ionScale, bounds: scene.solids.bounds });
   useStagePointer(element, {
     store,
     onHover: (at) => setHovered(at === null ? null : pick(at.x, at.y)),
@@ -131,7 +134,7 @@ export function Stage(props: StageProps): JSX.Element {
         <RingsLayer {...layer} picked={picked} />
         {tagged !== undefined && <HoverTag {...layer} ion={tagged} describeIon={describeIon} />}
         <PinsLayer {...layer} pins={props.pins} onPinClick={props.onPinClick} />
-        <Compass frames={frames} store={store} vectorsA={props.cell.vectorsA} />
+        {props.children}
       </div>
       <p id={helpId} className="sr-only">
         {keysText}

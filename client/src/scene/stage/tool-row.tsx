@@ -1,5 +1,5 @@
 import { RotateCcw } from 'lucide-react';
-import { useSyncExternalStore, type JSX } from 'react';
+import { useSyncExternalStore, type JSX, type ReactNode } from 'react';
 
 import { IconButton } from '#client/components/button.tsx';
 import { Segmented } from '#client/components/segmented.tsx';
@@ -21,6 +21,8 @@ interface ToolRowProps {
   onSignMarksChange: ((isOn: boolean) => void) | undefined;
   onFreeView: () => void;
   onReset: () => void;
+  /** Stands beside the directions. */
+  children?: ReactNode;
 }
 
 const directions = (['a', 'b', 'c', 'free'] as const).map((value) => ({
@@ -37,18 +39,36 @@ export function ToolRow(props: ToolRowProps): JSX.Element {
     if (next === 'free') {
       props.onFreeView();
     } else {
-      store.glideTo(viewDown(vectorsA, next));
+      store.glideToFitted(viewDown(vectorsA, next));
     }
   };
   return (
     <div className="flex flex-wrap items-center gap-x-5 gap-y-2 py-2 text-small text-soft">
       <Segmented label="View along" options={directions} value={direction} onChange={look} />
+      <IconButton
+        label="Show the whole block"
+        icon={<RotateCcw aria-hidden className="size-4" />}
+        onClick={props.onReset}
+        className="-ml-3"
+      />
+      {props.children}
       {props.onRepeatChange !== undefined && (
         <RepeatControl
           repeat={props.repeat}
           isCut={props.isRepeatCut}
           onChange={props.onRepeatChange}
         />
+      )}
+      {props.onSignMarksChange !== undefined && (
+        <label className="flex items-center gap-2">
+          <input
+            type="checkbox"
+            checked={signMarks}
+            onChange={(event) => props.onSignMarksChange?.(event.target.checked)}
+            className="size-4 accent-ink"
+          />
+          Sign marks
+        </label>
       )}
       {props.onIonScaleChange !== undefined && (
         <label className="flex items-center gap-2">
@@ -68,23 +88,6 @@ export function ToolRow(props: ToolRowProps): JSX.Element {
           </span>
         </label>
       )}
-      {props.onSignMarksChange !== undefined && (
-        <label className="flex items-center gap-2">
-          <input
-            type="checkbox"
-            checked={signMarks}
-            onChange={(event) => props.onSignMarksChange?.(event.target.checked)}
-            className="size-4 accent-ink"
-          />
-          Sign marks
-        </label>
-      )}
-      <IconButton
-        label="Show the whole block"
-        icon={<RotateCcw aria-hidden className="size-4" />}
-        onClick={props.onReset}
-        className="-ml-2"
-      />
     </div>
   );
 }

@@ -25,7 +25,7 @@ export function useScene(props: LatticeViewerProps) {
     () => buildSolids(model, ionScale, signMarks),
     [model, ionScale, signMarks],
   );
-  const edges = useMemo(() => buildEdges(model, theme), [model, theme]);
+  const edges = useMemo(() => buildEdges(model, ionScale, theme), [model, ionScale, theme]);
   const picked = useMemo(() => pickedIndices(model, selectedIonIds), [model, selectedIonIds]);
   const { speciesA, speciesB, distanceA } = litPair ?? {};
   const litFrom = picked.length === 1 ? picked[0]! : null;
@@ -37,7 +37,7 @@ export function useScene(props: LatticeViewerProps) {
     [model, solids, speciesA, speciesB, distanceA, litFrom, theme],
   );
   const palette = useMemo(() => paletteOf(model, theme), [model, theme]);
-  const { paper, wash: foot } = stageInks[theme];
+  const { paper, foot } = stageInks[theme];
   const inks = useMemo(() => ({ palette, paper, foot }), [palette, paper, foot]);
   return { model, solids, edges, litPairs, palette, paper, foot, inks, picked, repeat };
 }

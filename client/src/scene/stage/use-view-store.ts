@@ -1,6 +1,6 @@
 import { useEffect, useRef, useState } from 'react';
 
-import { defaultSceneView, isSameView, type SceneView } from '../model/scene-view.ts';
+import { isSameView, type SceneView } from '../model/scene-view.ts';
 import { ViewStore } from './view-store.ts';
 
 /** The camera: follows the `view` prop, reports where it came to rest. */
@@ -8,7 +8,7 @@ export function useViewStore(
   view: SceneView | null,
   onViewChange: ((view: SceneView) => void) | undefined,
 ): ViewStore {
-  const [store] = useState(() => new ViewStore(view ?? defaultSceneView));
+  const [store] = useState(() => new ViewStore(view));
   const reported = useRef(view);
   useEffect(
     () =>
@@ -21,7 +21,7 @@ export function useViewStore(
   useEffect(() => {
     const isOwn = reported.current !== null && view !== null && isSameView(view, reported.current);
     if (view !== null && !isOwn && !isSameView(view, store.view)) {
-      store.set(view);
+      store.show(view);
     }
   }, [store, view]);
   return store;

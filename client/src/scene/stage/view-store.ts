@@ -1,4 +1,4 @@
-import { isSameView, type SceneView } from '../model/scene-view.ts';
+import { defaultSceneView, type SceneView } from '../model/scene-view.ts';
 
 type Listener = (view: SceneView) => void;
 
@@ -28,7 +28,18 @@ export class ViewStore {
   private timer: ReturnType<typeof setTimeout> | undefined;
   private frame = 0;
 
-  constructor(public view: SceneView) {}
+  /** Fits a direction to the stage; set by the stage once it knows its size. */
+  fit: (view: SceneView) => SceneView = (view) => view;
+  /** Nobody has moved the camera since it was fitted: it may be fitted again. */
+  isFitted: boolean;
+
+  /** @param view where to start; null for the first view, fitted to the stage */
+  constructor(view: SceneView | null) {
+    this.view = view ?? defaultSceneView;
+    this.isFitted = view === null;
+  }
+
+  view: SceneView;
 
   subscribe = (listener: Listener): (() => void) => {
     this.listeners.add(listener);
@@ -48,7 +59,29 @@ export class ViewStore {
 
   set(view: SceneView): void {
     cancelAnimationFrame(this.frame);
+    this.isFitted = false;
     this.apply(view);
+    this.report();
+  }
+
+  /** Shows a view that came from outside; it is not reported back. */
+  show(view: SceneView): void {
+    cancelAnimationFrame(this.frame);
+    this.isFitted = false;
+    this.apply(view);
+  }
+
+  /** Fits the present direction again, after the stage or the block changed size. */
+  refit(): void {
+    if (this.isFitted) {
+      this.apply(this.fit(this.view));
+    }
+  }
+
+  /** Shows the whole block from a direction. */
+  glideToFitted(direction: SceneView): void {
+    this.glideTo(this.fit(direction));
+    this.isFitted = true;
   }
 
   /** Moves to a view within 170 ms, or at once where less motion is asked for. */
@@ -58,6 +91,7 @@ export class ViewStore {
       return;
     }
     cancelAnimationFrame(this.frame);
+    this.isFitted = false;
     const from = this.view;
     const start = performance.now();
     const step = (now: number): void => {
@@ -65,6 +99,8 @@ export class ViewStore {
       this.apply(share === 1 ? target : between(from, target, share));
       if (share < 1) {
         this.frame = requestAnimationFrame(step);
+      } else {
+        this.report();
       }
     };
     this.frame = requestAnimationFrame(step);
@@ -76,14 +112,13 @@ export class ViewStore {
   }
 
   private apply(view: SceneView): void {
-    if (isSameView(view, this.view)) {
-      this.view = view;
-      return;
-    }
     this.view = view;
     for (const listener of this.listeners) {
       listener(view);
     }
+  }
+
+  private report(): void {
     clearTimeout(this.timer);
     this.timer = setTimeout(() => {
       for (const listener of this.settled) {
