@@ -63,6 +63,7 @@ export const errorCodes = {
   'cell.no_charges': [422, 'Every charge is zero, so there is nothing to sum.'],
   'cell.too_many_sites': [422, 'The cell has more sites than this server takes.'],
 
+  'file.unreadable': [422, 'The file can’t be read.'],
   'cif.syntax': [422, 'The CIF can’t be read.'],
   'cif.no_structure': [422, 'The CIF holds no structure.'],
   'cif.missing_value': [422, 'A value the structure needs is missing.'],

@@ -19,7 +19,7 @@ const forever = 'public, max-age=31536000, immutable';
 const hallNumberText = z.string().regex(/^\d{1,3}$/, 'A Hall number is a whole number, 1 to 530.');
 
 @ApiTags('Symmetry')
-@Controller('api/space-groups')
+@Controller('space-groups')
 export class SymmetryController {
   @Get()
   @Public()
