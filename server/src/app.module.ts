@@ -9,6 +9,7 @@ import { HealthModule } from '#server/health/health.module';
 import { HttpModule } from '#server/http/http.module';
 import { StaticClientModule } from '#server/http/static-client.module';
 import { InstallationModule } from '#server/installation/installation.module';
+import { SymmetryModule } from '#server/symmetry/symmetry.module';
 import { UsersModule } from '#server/users/users.module';
 import { WorkspacesModule } from '#server/workspaces/workspaces.module';
 
@@ -24,6 +25,7 @@ import { WorkspacesModule } from '#server/workspaces/workspaces.module';
     AuditModule,
     AuthModule,
     WorkspacesModule,
+    SymmetryModule,
     StaticClientModule,
   ],
 })

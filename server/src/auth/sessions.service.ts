@@ -5,6 +5,7 @@ import { Problem } from '#common/errors/problem';
 import type { SessionSummary } from '#common/schemas/auth';
 import { Clock } from '#server/config/clock';
 import { uuidV7 } from '#server/database/uuid-v7';
+import { isId } from '#server/http/is-id';
 
 import { presentSession, sessionEnd } from './session.presenter.js';
 import { SessionRepository } from './session.repository.js';
@@ -59,7 +60,7 @@ export class SessionsService {
    * @throws {Problem} `session.not_found`
    */
   async revoke(userId: string, sessionId: string): Promise<void> {
-    if (!(await this.repository.remove(userId, sessionId))) {
+    if (!isId(sessionId) || !(await this.repository.remove(userId, sessionId))) {
       throw new Problem('session.not_found');
     }
   }

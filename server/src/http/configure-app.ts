@@ -25,6 +25,8 @@ export function configureApp(app: NestExpressApplication, logger: Logger): void 
   const isHttps = config.publicOrigins.every((origin) => origin.startsWith('https:'));
   app.disable('x-powered-by');
   app.set('trust proxy', config.trustedProxies);
+  // Only what has a version of its own carries an ETag.
+  app.set('etag', false);
   app.set('query parser', 'simple');
   app.setGlobalPrefix('api');
   app.use(requestLogging(logger));

@@ -40,6 +40,9 @@ export const requestLogging = (logger: Logger) =>
     },
   });
 
+/** Parts of Nest whose every line at start is of interest to nobody but a debugger. */
+const chattyParts = new Set<unknown>(['InstanceLoader', 'RoutesResolver', 'RouterExplorer']);
+
 type Level = 'fatal' | 'error' | 'warn' | 'info' | 'debug' | 'trace';
 
 /** Lets Nest and everything that uses its `Logger` write to the same log. */
@@ -47,7 +50,7 @@ export class PinoLoggerService implements LoggerService {
   constructor(private readonly logger: Logger) {}
 
   log(message: unknown, ...rest: unknown[]): void {
-    this.write('info', message, rest);
+    this.write(chattyParts.has(rest.at(-1)) ? 'debug' : 'info', message, rest);
   }
 
   error(message: unknown, ...rest: unknown[]): void {

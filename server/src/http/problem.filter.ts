@@ -21,6 +21,9 @@ function statusOf(error: unknown): number | null {
   return typeof status === 'number' && expose === true ? status : null;
 }
 
+const messageOf = (error: unknown): string =>
+  error instanceof Error ? error.message.replace(/\.$/, '') : 'it is malformed';
+
 /** What a failure is to the caller; null when nobody expected it. */
 function asProblem(error: unknown): Problem | null {
   if (error instanceof Problem) {
@@ -38,7 +41,7 @@ function asProblem(error: unknown): Problem | null {
       return new Problem('request.too_large');
     default:
       return status !== null && status >= 400 && status < 500
-        ? new Problem('request.invalid', error instanceof Error ? error.message : undefined)
+        ? new Problem('request.invalid', `The request can’t be read: ${messageOf(error)}.`)
         : null;
   }
 }

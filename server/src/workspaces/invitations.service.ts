@@ -2,11 +2,12 @@ import { Inject, Injectable } from '@nestjs/common';
 
 import { Problem } from '#common/errors/problem';
 import type { Role } from '#common/schemas/auth';
-import { id as idSchema, secretToken } from '#common/schemas/shared';
+import { secretToken } from '#common/schemas/shared';
 import { AuditService } from '#server/audit/audit.service';
 import { Clock } from '#server/config/clock';
 import { DATABASE, withTransaction, type Database } from '#server/database/database';
 import { isUniqueViolation } from '#server/database/database-errors';
+import { isId } from '#server/http/is-id';
 import { assertCan, type RequestContext } from '#server/http/request-context';
 import { newSecretToken, secretTokenHash } from '#server/http/secret-token';
 import { UsersService } from '#server/users/users.service';
@@ -64,7 +65,7 @@ export class InvitationsService {
     assertCan(context, 'invitation.withdraw');
     const now = this.clock.now();
     await withTransaction(this.db, async (tx) => {
-      const row = idSchema.safeParse(id).success
+      const row = isId(id)
         ? await this.invitations.withdraw(context.workspace.id, id, now, tx)
         : null;
       if (row === null) {

@@ -2,7 +2,6 @@ import { Inject, Injectable } from '@nestjs/common';
 
 import { Problem } from '#common/errors/problem';
 import type { Role } from '#common/schemas/auth';
-import { id as idSchema } from '#common/schemas/shared';
 import { AuditService } from '#server/audit/audit.service';
 import {
   DATABASE,
@@ -11,6 +10,7 @@ import {
   type Transaction,
 } from '#server/database/database';
 import { isCheckViolation } from '#server/database/database-errors';
+import { isId } from '#server/http/is-id';
 import { assertCan, type RequestContext } from '#server/http/request-context';
 
 import { MembersRepository, type MemberRow } from './members.repository.js';
@@ -61,9 +61,7 @@ export class MembersService {
   }
 
   private async find(context: RequestContext, userId: string, tx: Transaction): Promise<MemberRow> {
-    const member = idSchema.safeParse(userId).success
-      ? await this.members.find(context.workspace.id, userId, tx)
-      : null;
+    const member = isId(userId) ? await this.members.find(context.workspace.id, userId, tx) : null;
     if (member === null) {
       throw new Problem('member.not_found');
     }
