@@ -1,7 +1,7 @@
 import { Check, Copy } from 'lucide-react';
 import { useEffect, useState, type JSX } from 'react';
 
-import { Button, IconButton } from '#client/components/button.tsx';
+import { Button, IconButton, type ButtonVariant } from '#client/components/button.tsx';
 import { useToast } from '#client/components/toast.tsx';
 import { copyText } from '#client/lib/copy-text.ts';
 
@@ -11,6 +11,7 @@ interface CopyButtonProps {
   label: string;
   /** With its label beside the sign. */
   isNamed?: boolean;
+  variant?: ButtonVariant;
   className?: string;
 }
 
@@ -21,6 +22,7 @@ export function CopyButton({
   text,
   label,
   isNamed = false,
+  variant = 'plain',
   className,
 }: CopyButtonProps): JSX.Element {
   const show = useToast();
@@ -45,7 +47,7 @@ export function CopyButton({
     <Copy aria-hidden className="size-4" />
   );
   return isNamed ? (
-    <Button onClick={copy} className={className}>
+    <Button variant={variant} onClick={copy} className={className}>
       {sign}
       <span aria-live="polite">{isCopied ? 'Copied' : label}</span>
     </Button>

@@ -26,7 +26,7 @@ export function Dialog({
 }: DialogProps): JSX.Element {
   return (
     <Modal open={open} onClose={onClose} className="relative z-40">
-      <DialogBackdrop className="fixed inset-0 bg-ink/30 dark:bg-paper/70" />
+      <DialogBackdrop className="fixed inset-0 bg-ink/25 dark:bg-paper/70" />
       <div className="fixed inset-0 grid items-end justify-items-center overflow-y-auto md:items-center md:p-6">
         <DialogPanel
           className={classNames(

@@ -34,7 +34,8 @@ export function Menu({
         {trigger}
       </MenuButton>
       <MenuItems
-        anchor={{ to: `bottom ${align}`, gap: 6 }}
+        modal={false}
+        anchor={{ to: `bottom ${align}`, gap: 6, padding: 8 }}
         className="z-50 min-w-52 rounded-control border border-line bg-raised p-1 shadow-sheet focus:outline-none"
       >
         {children}

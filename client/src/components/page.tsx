@@ -16,7 +16,7 @@ export function Page({ title, width = 'full', className, children }: PageProps):
     <div
       className={classNames(
         'px-4 pt-6 pb-16 md:px-7',
-        width === 'reading' && 'mx-auto w-full max-w-3xl',
+        width === 'reading' && 'mx-auto w-full max-w-4xl',
         className,
       )}
     >

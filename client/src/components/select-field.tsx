@@ -75,7 +75,8 @@ export function SelectField<Value extends string>({
         </ListboxButton>
       </FieldFrame>
       <ListboxOptions
-        anchor={{ to: 'bottom start', gap: 4 }}
+        modal={false}
+        anchor={{ to: 'bottom start', gap: 4, padding: 8 }}
         className="z-50 w-max max-w-80 min-w-(--button-width) rounded-control border border-line bg-raised p-1 shadow-sheet focus:outline-none"
       >
         {options.map((option) => (

@@ -4,7 +4,7 @@ import type { z } from 'zod';
 import { problemBody, type ProblemDetails } from '#common/errors/problem';
 import { errorCodes, type ErrorCode } from '#common/errors/error-codes';
 
-export interface FakeRequest {
+interface FakeRequest {
   method: string;
   path: string;
   query: Record<string, string>;

@@ -48,7 +48,7 @@ function InvitationLink({
       />
       <div className="flex justify-end gap-2">
         <Button onClick={onClose}>Done</Button>
-        <CopyButton text={link} label="Copy the link" isNamed />
+        <CopyButton text={link} label="Copy the link" isNamed variant="primary" />
       </div>
     </div>
   );
