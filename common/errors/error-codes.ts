@@ -24,7 +24,10 @@ export const errorCodes = {
   'member.not_found': [404, 'There is no such member.'],
   'member.last_owner': [409, 'A workspace needs an owner. Make someone else owner first.'],
   'member.already': [409, 'This person is a member already.'],
-  'invitation.not_found': [404, 'This invitation is not valid: it was used, withdrawn or is out of date.'],
+  'invitation.not_found': [
+    404,
+    'This invitation is not valid: it was used, withdrawn or is out of date.',
+  ],
 
   'lattice.not_found': [404, 'There is no such lattice.'],
   'revision.not_found': [404, 'There is no such revision.'],
@@ -34,11 +37,20 @@ export const errorCodes = {
   'draft.not_found': [404, 'There is no draft.'],
   'draft.conflict': [412, 'Someone else changed this draft after you opened it.'],
   'annotation.not_found': [404, 'There is no such remark.'],
-  'annotation.bad_anchor': [422, 'The remark points at a site or pair that this revision does not have.'],
-  'share.not_found': [404, 'This link is not valid: it was withdrawn, is out of date or never existed.'],
+  'annotation.bad_anchor': [
+    422,
+    'The remark points at a site or pair that this revision does not have.',
+  ],
+  'share.not_found': [
+    404,
+    'This link is not valid: it was withdrawn, is out of date or never existed.',
+  ],
   'evaluation.not_found': [404, 'There is no such evaluation.'],
   'evaluation.failed': [500, 'The computation stopped. Try again.'],
-  'evaluation.timeout': [422, 'The computation took too long. Use a smaller cell or a looser tolerance.'],
+  'evaluation.timeout': [
+    422,
+    'The computation took too long. Use a smaller cell or a looser tolerance.',
+  ],
   'prototype.not_found': [404, 'There is no such prototype.'],
   'space_group.not_found': [404, 'There is no such space group.'],
 
@@ -56,10 +68,16 @@ export const errorCodes = {
   'cell.element': [422, 'There is no such element.'],
   'cell.charge': [422, 'A charge must be a number between −9 and 9.'],
   'cell.label': [422, 'Each site needs its own label.'],
-  'cell.occupancy': [422, 'An occupancy must lie above 0 and at most 1; the sum on one place at most 1.'],
+  'cell.occupancy': [
+    422,
+    'An occupancy must lie above 0 and at most 1; the sum on one place at most 1.',
+  ],
   'cell.coordinate': [422, 'A coordinate must be a finite number.'],
   'cell.coincident_sites': [422, 'Two sites lie on the same place.'],
-  'cell.not_neutral': [422, 'The charges do not add up to zero, so the cell has no Madelung energy.'],
+  'cell.not_neutral': [
+    422,
+    'The charges do not add up to zero, so the cell has no Madelung energy.',
+  ],
   'cell.no_charges': [422, 'Every charge is zero, so there is nothing to sum.'],
   'cell.too_many_sites': [422, 'The cell has more sites than this server takes.'],
 
@@ -72,7 +90,10 @@ export const errorCodes = {
   'cif.loop_count': [422, 'A loop’s values do not fill its rows.'],
   'cif.symmetry': [422, 'The symmetry can’t be made out.'],
   'cif.ambiguous_origin': [422, 'The space group has two origins and the file does not say which.'],
-  'cif.charges_needed': [422, 'Oxidation numbers are needed: none are given and no single neutral choice exists.'],
+  'cif.charges_needed': [
+    422,
+    'Oxidation numbers are needed: none are given and no single neutral choice exists.',
+  ],
 } as const satisfies Record<string, readonly [number, string]>;
 
 /** A code the API may answer with. */

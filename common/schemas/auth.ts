@@ -4,7 +4,12 @@ import { id, secretToken, slug, timestamp } from '#common/schemas/shared';
 
 export const passwordLimits = { minLength: 12, maxLength: 128 } as const;
 
-const email = z.string().trim().toLowerCase().max(254).pipe(z.email('Write an e-mail address like name@example.org.'));
+const email = z
+  .string()
+  .trim()
+  .toLowerCase()
+  .max(254)
+  .pipe(z.email('Write an e-mail address like name@example.org.'));
 const password = z
   .string()
   .min(passwordLimits.minLength, `Use at least ${passwordLimits.minLength} characters.`)
@@ -14,16 +19,27 @@ const personName = z.string().trim().min(1, 'Write a name.').max(80);
 export const role = z.enum(['owner', 'crystallographer', 'reviewer', 'reader']);
 export type Role = z.infer<typeof role>;
 
-export const signInRequest = z.object({ email, password: z.string().min(1, 'Write your password.').max(passwordLimits.maxLength) });
+export const signInRequest = z.object({
+  email,
+  password: z.string().min(1, 'Write your password.').max(passwordLimits.maxLength),
+});
 export type SignInRequest = z.infer<typeof signInRequest>;
 
-export const changePasswordRequest = z.object({ currentPassword: z.string().min(1).max(128), newPassword: password });
+export const changePasswordRequest = z.object({
+  currentPassword: z.string().min(1).max(128),
+  newPassword: password,
+});
 export type ChangePasswordRequest = z.infer<typeof changePasswordRequest>;
 
 export const updateProfileRequest = z.object({ name: personName });
 
 /** One-time set-up of a server that starts empty. */
-export const setupRequest = z.object({ name: personName, email, password, workspaceName: z.string().trim().min(1).max(80) });
+export const setupRequest = z.object({
+  name: personName,
+  email,
+  password,
+  workspaceName: z.string().trim().min(1).max(80),
+});
 export type SetupRequest = z.infer<typeof setupRequest>;
 
 export const membershipSummary = z.object({
@@ -72,7 +88,10 @@ export type SessionSummary = z.infer<typeof sessionSummary>;
 export const sessionList = z.object({ items: z.array(sessionSummary) });
 
 /** Accepting an invitation: with a new account (name and password), or as the person signed in (neither). */
-export const acceptInvitationRequest = z.object({ name: personName.optional(), password: password.optional() });
+export const acceptInvitationRequest = z.object({
+  name: personName.optional(),
+  password: password.optional(),
+});
 export const invitationPreview = z.object({
   workspaceName: z.string(),
   workspaceSlug: slug,
@@ -85,7 +104,20 @@ export const invitationPreview = z.object({
 });
 export type InvitationPreview = z.infer<typeof invitationPreview>;
 export const createInvitationRequest = z.object({ email, role });
-export const createdInvitation = z.object({ id, token: secretToken, email: z.string(), role, expiresAt: timestamp });
-export const invitationSummary = z.object({ id, email: z.string(), role, invitedBy: z.string(), createdAt: timestamp, expiresAt: timestamp });
+export const createdInvitation = z.object({
+  id,
+  token: secretToken,
+  email: z.string(),
+  role,
+  expiresAt: timestamp,
+});
+export const invitationSummary = z.object({
+  id,
+  email: z.string(),
+  role,
+  invitedBy: z.string(),
+  createdAt: timestamp,
+  expiresAt: timestamp,
+});
 export type InvitationSummary = z.infer<typeof invitationSummary>;
 export const invitationList = z.object({ items: z.array(invitationSummary) });

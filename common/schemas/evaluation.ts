@@ -166,7 +166,10 @@ export const evaluationResult = z.object({
 export type EvaluationResult = z.infer<typeof evaluationResult>;
 
 /** Ask for an evaluation. */
-export const evaluateRequest = z.object({ cell: cellDefinition, method: evaluationMethod.optional() });
+export const evaluateRequest = z.object({
+  cell: cellDefinition,
+  method: evaluationMethod.optional(),
+});
 export type EvaluateRequest = z.infer<typeof evaluateRequest>;
 
 /** An evaluation at its address. */

@@ -36,7 +36,16 @@ export const latticeSummary = z.object({
 });
 export type LatticeSummary = z.infer<typeof latticeSummary>;
 
-export const shelfSort = z.enum(['name', 'formula', 'spaceGroup', 'madelung', 'energy', 'state', 'author', 'updated']);
+export const shelfSort = z.enum([
+  'name',
+  'formula',
+  'spaceGroup',
+  'madelung',
+  'energy',
+  'state',
+  'author',
+  'updated',
+]);
 export const shelfQuery = pageQuery.extend({
   search: z.string().trim().max(100).default(''),
   sort: shelfSort.default('updated'),
@@ -56,7 +65,10 @@ export const createLatticeRequest = z.object({
   tags: tags.default([]),
 });
 export type CreateLatticeRequest = z.infer<typeof createLatticeRequest>;
-export const updateLatticeRequest = z.object({ name: latticeName.optional(), tags: tags.optional() });
+export const updateLatticeRequest = z.object({
+  name: latticeName.optional(),
+  tags: tags.optional(),
+});
 
 /** The unsaved edit. `etag` goes back as If-Match; baseRevision 0 means nothing is saved yet. */
 export const draft = z.object({

@@ -29,7 +29,10 @@ export const prototypeList = z.object({ items: z.array(prototypeSummary) });
 
 /** One ion per role, in the order of the roles. */
 export const applyPrototypeRequest = z.object({
-  ions: z.array(z.object({ element: z.string().max(3), charge: z.number().min(-9).max(9) })).min(1).max(6),
+  ions: z
+    .array(z.object({ element: z.string().max(3), charge: z.number().min(-9).max(9) }))
+    .min(1)
+    .max(6),
 });
 export type ApplyPrototypeRequest = z.infer<typeof applyPrototypeRequest>;
 

@@ -14,7 +14,12 @@ export type AnnotationAnchor = z.infer<typeof annotationAnchor>;
 
 const remarkText = z.string().trim().min(1, 'Write the remark.').max(4000);
 
-export const annotationReply = z.object({ id, author: personSummary, text: z.string(), createdAt: timestamp });
+export const annotationReply = z.object({
+  id,
+  author: personSummary,
+  text: z.string(),
+  createdAt: timestamp,
+});
 export const annotation = z.object({
   id,
   /** Shown in the stage and in the list; counts up per revision. */
@@ -35,5 +40,7 @@ export const createAnnotationRequest = z.object({ anchor: annotationAnchor, text
 export type CreateAnnotationRequest = z.infer<typeof createAnnotationRequest>;
 export const replyRequest = z.object({ text: remarkText });
 
-export const returnRevisionRequest = z.object({ reason: z.string().trim().min(1, 'Say why it goes back.').max(2000) });
+export const returnRevisionRequest = z.object({
+  reason: z.string().trim().min(1, 'Say why it goes back.').max(2000),
+});
 export const acceptRevisionRequest = z.object({ reason: z.string().trim().max(2000).default('') });

@@ -4,7 +4,9 @@ import { revisionDetail } from '#common/schemas/lattice';
 import { id, personSummary, secretToken, timestamp } from '#common/schemas/shared';
 
 /** Days until the link ends; null: until withdrawn. */
-export const createShareRequest = z.object({ expiresInDays: z.number().int().min(1).max(365).nullable().default(null) });
+export const createShareRequest = z.object({
+  expiresInDays: z.number().int().min(1).max(365).nullable().default(null),
+});
 
 export const shareSummary = z.object({
   id,

@@ -1,0 +1,163 @@
+import { findElement } from '#common/chemistry/elements';
+import type { FieldProblem } from '#common/errors/problem';
+import { evaluateExpression, evaluateParameters } from '#common/expressions/evaluate-expression';
+import { resolveLattice } from '#common/physics/resolve-lattice';
+import { resolveSites, type SiteNumbers } from '#common/physics/resolve-sites';
+import type { ResolvedCell } from '#common/physics/resolved-cell';
+import type { CellDefinition, CellSite } from '#common/schemas/cell';
+import type { SpaceGroupSetting, SymmetryOperation } from '#common/schemas/symmetry';
+
+/** The operations to apply, and the tabulated setting they belong to, if any. */
+export interface CellSymmetryData {
+  readonly operations: readonly SymmetryOperation[];
+  readonly setting: SpaceGroupSetting | null;
+}
+
+type Parameters = Readonly<Record<string, number>>;
+
+const largestChargeE = 9;
+
+/** Reads one number of a site row; null and a problem where it can't be read or is out of range. */
+function readNumber(
+  text: string,
+  field: string,
+  parameters: Parameters,
+  problems: FieldProblem[],
+  check: (value: number) => { code: string; message: string } | null,
+): number | null {
+  const result = evaluateExpression(text, parameters);
+  if (!result.ok) {
+    problems.push({ code: 'cell.expression', field, message: result.message });
+    return null;
+  }
+  const fault = check(result.value);
+  if (fault !== null) {
+    problems.push({ field, ...fault });
+    return null;
+  }
+  return result.value;
+}
+
+const checkCharge = (value: number) =>
+  Math.abs(value) <= largestChargeE
+    ? null
+    : {
+        code: 'cell.charge',
+        message: `Write a charge between −${largestChargeE} and ${largestChargeE}.`,
+      };
+const checkCoordinate = (value: number) =>
+  Math.abs(value) <= 1000
+    ? null
+    : {
+        code: 'cell.coordinate',
+        message: 'Write a fractional coordinate, usually between 0 and 1.',
+      };
+const checkOccupancy = (value: number) =>
+  value > 0 && value <= 1
+    ? null
+    : { code: 'cell.occupancy', message: 'Write an occupancy above 0 and at most 1.' };
+
+function labelProblem(sites: readonly CellSite[], index: number): string | null {
+  const label = sites[index]!.label.trim();
+  if (label === '') {
+    return 'Give the site a label, such as Mg1.';
+  }
+  const isTaken = sites.findIndex((site) => site.label.trim() === label) !== index;
+  return isTaken ? `There are two sites called ${label}: rename one.` : null;
+}
+
+function readSite(
+  sites: readonly CellSite[],
+  index: number,
+  parameters: Parameters,
+  problems: FieldProblem[],
+): SiteNumbers | null {
+  const site = sites[index]!;
+  const at = (name: keyof CellSite) => `sites.${index}.${name}`;
+  const label = labelProblem(sites, index);
+  if (label !== null) {
+    problems.push({ code: 'cell.label', field: at('label'), message: label });
+  }
+  const element = findElement(site.element);
+  if (element === null) {
+    const message = `“${site.element}” is not an element: write a symbol such as Mg.`;
+    problems.push({ code: 'cell.element', field: at('element'), message });
+  }
+  const read = (name: 'x' | 'y' | 'z') =>
+    readNumber(site[name], at(name), parameters, problems, checkCoordinate);
+  const chargeE = readNumber(site.charge, at('charge'), parameters, problems, checkCharge);
+  const [x, y, z] = [read('x'), read('y'), read('z')];
+  const occupancy = readNumber(
+    site.occupancy,
+    at('occupancy'),
+    parameters,
+    problems,
+    checkOccupancy,
+  );
+  const numbers = [chargeE, x, y, z, occupancy];
+  if (label !== null || element === null || numbers.some((number) => number === null)) {
+    return null;
+  }
+  return {
+    definitionIndex: index,
+    label: site.label.trim(),
+    component: { element: element.symbol, chargeE: chargeE!, occupancy: occupancy! },
+    fractional: [x!, y!, z!],
+  };
+}
+
+/**
+ * Whether symmetry leaves a direction unchanged: ΣW, the projector on what every operation keeps,
+ * is then not zero.
+ */
+function leavesPolarAxis(operations: readonly SymmetryOperation[]): boolean {
+  const sum = new Array<number>(9).fill(0);
+  for (const { rotation } of operations) {
+    rotation.forEach((entry, k) => {
+      sum[k]! += entry;
+    });
+  }
+  return sum.some((entry) => entry !== 0);
+}
+
+/**
+ * Turns a cell as typed into numbers: parameters and expressions evaluated, lattice checked,
+ * symmetry applied, shared places merged.
+ *
+ * @param definition the cell as a person defined it
+ * @param symmetry operations of its space group (the identity among them)
+ * @returns the cell, or null with a problem per field at fault; field paths are relative to the
+ *   cell: `sites.0.x`, `lattice.a`, `parameters.1.expression`
+ */
+export function resolveCell(
+  definition: CellDefinition,
+  symmetry: CellSymmetryData,
+): { cell: ResolvedCell | null; problems: FieldProblem[] } {
+  const { values: parameters, problems } = evaluateParameters(definition.parameters);
+  const lattice = resolveLattice(definition.lattice, parameters, symmetry.setting);
+  if (Array.isArray(lattice)) {
+    problems.push(...lattice);
+  }
+  if (definition.sites.length === 0) {
+    const message = 'Add at least one site: an element, its charge and where it is.';
+    problems.push({ code: 'cell.no_sites', field: 'sites', message });
+  }
+  const rows = definition.sites
+    .map((_, index) => readSite(definition.sites, index, parameters, problems))
+    .filter((row) => row !== null);
+  if (Array.isArray(lattice) || problems.length > 0) {
+    return { cell: null, problems };
+  }
+  const resolved = resolveSites(rows, symmetry.operations, lattice.vectorsA);
+  if (resolved.problems.length > 0) {
+    return { cell: null, problems: resolved.problems };
+  }
+  const cell: ResolvedCell = {
+    ...lattice,
+    sites: resolved.sites,
+    operationCount: symmetry.operations.length,
+    hasPolarAxis: leavesPolarAxis(symmetry.operations),
+    parameters,
+  };
+  return { cell, problems: [] };
+}
