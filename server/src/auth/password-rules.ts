@@ -62,6 +62,8 @@ const wordsAbout = ({ name, email }: PasswordOwner): string[] =>
 /** Fewest different characters, and characters left once all that is guessable is taken out. */
 const fewestDifferent = 5;
 const fewestLeft = 6;
+/** Fewest characters of a password without a letter: shorter ones are dates and telephone numbers. */
+const fewestWithoutLetters = 16;
 
 /** Why a password is easily guessed and what to do, or null when it is not. */
 export function passwordWeakness(password: string, owner: PasswordOwner): string | null {
@@ -81,8 +83,7 @@ export function passwordWeakness(password: string, owner: PasswordOwner): string
     (sign, at: number, whole: string) => (whole[at - 1] === sign ? '' : sign),
   );
   const letters = rest.replace(/[^\p{L}]/gu, '');
-  return rest.length < fewestLeft ||
-    (letters.length === 0 && rest.length < passwordLimits.minLength)
+  return rest.length < fewestLeft || (letters === '' && rest.length < fewestWithoutLetters)
     ? 'This is among the first that guessers try. Several unrelated words make a good one.'
     : null;
 }

@@ -3,6 +3,7 @@ import { createHash } from 'node:crypto';
 import { Inject, Injectable } from '@nestjs/common';
 import { asc, eq, inArray, lt, sql } from 'drizzle-orm';
 
+import { Clock } from '#server/config/clock';
 import { DATABASE, withTransaction, type Database } from '#server/database/database';
 
 import { delayAfterMs, forgetAfterMs, type AttemptKind } from './sign-in-delay.js';
@@ -23,19 +24,23 @@ const sortedKeys = (keys: readonly AttemptKey[]) =>
 
 @Injectable()
 export class SignInAttemptRepository {
-  constructor(@Inject(DATABASE) private readonly db: Database) {}
+  constructor(
+    @Inject(DATABASE) private readonly db: Database,
+    private readonly clock: Clock,
+  ) {}
 
   /**
    * Counts a try as failed before it is judged, so that many at once gain nothing.
    * @returns milliseconds still to wait (then nothing was counted), 0 when the try may go on
    */
-  async begin(keys: readonly AttemptKey[], now: Date): Promise<number> {
+  async begin(keys: readonly AttemptKey[]): Promise<number> {
     const wanted = sortedKeys(keys);
     const names = wanted.map(({ key }) => key);
+    const start = this.clock.now();
     return withTransaction(this.db, async (tx) => {
       await tx
         .insert(signInAttempts)
-        .values(names.map((key) => ({ key, failures: 0, lastAt: now, blockedUntil: now })))
+        .values(names.map((key) => ({ key, failures: 0, lastAt: start, blockedUntil: start })))
         .onConflictDoNothing();
       // In one order, so that two tries never wait for each other.
       const rows = await tx
@@ -44,6 +49,8 @@ export class SignInAttemptRepository {
         .where(inArray(signInAttempts.key, names))
         .orderBy(asc(signInAttempts.key))
         .for('update');
+      // Read once the rows are held: a try that came first may have waited less.
+      const now = this.clock.now();
       const waitMs = Math.max(...rows.map((row) => row.blockedUntil.getTime() - now.getTime()));
       if (waitMs > 0) {
         return waitMs;
@@ -66,7 +73,7 @@ export class SignInAttemptRepository {
    * Takes back the count of a try that was right. Accounts and browsers start anew; an address
    * only loses this one, or an attacker's own account would wash it clean.
    */
-  async succeed(keys: readonly AttemptKey[], now: Date): Promise<void> {
+  async succeed(keys: readonly AttemptKey[]): Promise<void> {
     const names = sortedKeys(keys);
     const own = names.filter(({ kind }) => kind !== 'address').map(({ key }) => key);
     const addresses = names.filter(({ kind }) => kind === 'address').map(({ key }) => key);
@@ -76,7 +83,7 @@ export class SignInAttemptRepository {
           .update(signInAttempts)
           .set({
             failures: sql`greatest(${signInAttempts.failures} - 1, 0)`,
-            blockedUntil: now,
+            blockedUntil: this.clock.now(),
           })
           .where(inArray(signInAttempts.key, addresses));
       }
@@ -87,9 +94,9 @@ export class SignInAttemptRepository {
   }
 
   /** Forgets what is too old to count. */
-  async forgetOld(now: Date): Promise<void> {
+  async forgetOld(): Promise<void> {
     await this.db
       .delete(signInAttempts)
-      .where(lt(signInAttempts.lastAt, new Date(now.getTime() - forgetAfterMs)));
+      .where(lt(signInAttempts.lastAt, new Date(this.clock.now().getTime() - forgetAfterMs)));
   }
 }

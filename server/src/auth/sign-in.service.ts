@@ -4,7 +4,6 @@ import type { Request, Response } from 'express';
 import { Problem } from '#common/errors/problem';
 import type { SignInRequest } from '#common/schemas/auth';
 import { AuditService } from '#server/audit/audit.service';
-import { Clock } from '#server/config/clock';
 import { APP_CONFIG, type AppConfig } from '#server/config/environment';
 import type { UserContext } from '#server/http/request-context';
 import { UsersService } from '#server/users/users.service';
@@ -27,7 +26,6 @@ export class SignInService {
     private readonly sessions: SessionsService,
     private readonly attempts: SignInAttemptRepository,
     private readonly audit: AuditService,
-    private readonly clock: Clock,
     @Inject(APP_CONFIG) private readonly config: AppConfig,
   ) {}
 
@@ -47,7 +45,7 @@ export class SignInService {
       }
       throw new Problem('auth.bad_credentials');
     }
-    await this.attempts.succeed(keys, this.clock.now());
+    await this.attempts.succeed(keys);
     await this.open(request, response, user);
     return user.id;
   }
@@ -95,7 +93,7 @@ export class SignInService {
         ],
       });
     }
-    await this.attempts.succeed(keys, this.clock.now());
+    await this.attempts.succeed(keys);
   }
 
   private attemptKeys(request: Request, email: string): AttemptKey[] {
@@ -110,7 +108,7 @@ export class SignInService {
   }
 
   private async beginAttempt(keys: readonly AttemptKey[]): Promise<void> {
-    const waitMs = await this.attempts.begin(keys, this.clock.now());
+    const waitMs = await this.attempts.begin(keys);
     if (waitMs > 0) {
       const retryAfterSeconds = Math.ceil(waitMs / 1000);
       throw new Problem(
