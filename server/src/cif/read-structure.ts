@@ -1,14 +1,15 @@
+import { applyLatticeConstraints } from '#common/physics/crystal-system';
 import { resolveCell } from '#common/physics/resolve-cell';
 import type { CellDefinition, CellSite, CellSymmetry } from '#common/schemas/cell';
 import type { Warning } from '#common/schemas/evaluation';
 import type { SpaceGroupSetting } from '#common/schemas/symmetry';
-import { symmetryOf } from '#server/symmetry/space-groups';
+import { findSetting, symmetryOf } from '#server/symmetry/space-groups';
 
 import { findValue } from './format/block-values.js';
 import type { CifBlock } from './format/cif-document.js';
-import { chargesCanBalance } from './structure/charges-can-balance.js';
 import { readChemicalFormula } from './structure/chemical-formula.js';
 import { chooseOrigin } from './structure/choose-origin.js';
+import { neutralChoices } from './structure/neutral-choices.js';
 import { readLattice, type ReadLattice } from './structure/read-lattice.js';
 import { readSites, type ReadSite } from './structure/read-sites.js';
 import { readSymmetry } from './structure/read-symmetry.js';
@@ -45,9 +46,11 @@ export function readStructure(text: string): ReadStructure {
           kind: 'setting',
           hallNumber: originOf(found.candidates, block, lattice, sites, warnings).hallNumber,
         };
+  const cell = defineCell(lattice, symmetry, sites);
+  noteFittedLattice(lattice, cell, warnings);
   return {
     suggestedName: suggestName(block),
-    cell: defineCell(lattice, symmetry, sites),
+    cell,
     chargesGiven: sites.map(({ chargeE }) => chargeE !== null),
     siteLines: sites.map(({ line }) => line),
     warnings,
@@ -59,7 +62,30 @@ function defineCell(
   symmetry: CellSymmetry,
   sites: readonly ReadSite[],
 ): CellDefinition {
-  return { lattice: lattice.texts, symmetry, parameters: [], sites: sites.map(defineSite) };
+  const setting = symmetry.kind === 'setting' ? findSetting(symmetry.hallNumber) : null;
+  return {
+    lattice: applyLatticeConstraints(lattice.texts, setting),
+    symmetry,
+    parameters: [],
+    sites: sites.map(defineSite),
+  };
+}
+
+/** Edges that symmetry makes equal but the file gives apart, by rounding or refinement. */
+function noteFittedLattice(
+  { texts }: ReadLattice,
+  { lattice }: CellDefinition,
+  warnings: Warning[],
+): void {
+  const names = ['a', 'b', 'c', 'alpha', 'beta', 'gamma'] as const;
+  const changed = names.filter((name) => Number(texts[name]) !== Number(lattice[name]));
+  if (changed.length > 0) {
+    const parts = changed.map((name) => `${name} = ${texts[name]} became ${lattice[name]}`);
+    warnings.push({
+      code: 'cif.lattice_fitted',
+      message: `To fit the crystal system, ${parts.join(', ')}.`,
+    });
+  }
 }
 
 function defineSite(site: ReadSite): CellSite {
@@ -84,7 +110,7 @@ function originOf(
   warnings: Warning[],
 ): SpaceGroupSetting {
   const formula = findValue(block, '_chemical_formula_sum');
-  const chargeOf = new Map(sites.map(({ element, chargeE }) => [element, chargeE]));
+  const given = new Map(sites.map(({ element, chargeE }) => [element, chargeE]));
   const count = (setting: SpaceGroupSetting): ReadonlyMap<string, number> | null => {
     const symmetry: CellSymmetry = { kind: 'setting', hallNumber: setting.hallNumber };
     const { cell } = resolveCell(defineCell(lattice, symmetry, sites), symmetryOf(symmetry));
@@ -95,10 +121,28 @@ function originOf(
     {
       count,
       formula: formula ? readChemicalFormula(formula.text) : null,
-      canBeNeutral: (counts) => chargesCanBalance(counts, chargeOf),
+      canBeNeutral: (counts) => canBeNeutral(counts, given),
     },
     warnings,
   );
+}
+
+/** Neutral with the charge given for an element, else with a common one. */
+function canBeNeutral(
+  counts: ReadonlyMap<string, number>,
+  given: ReadonlyMap<string, number | null>,
+): boolean {
+  const open = new Map<string, number>();
+  let known = 0;
+  for (const [element, count] of counts) {
+    const chargeE = given.get(element) ?? null;
+    if (chargeE === null) {
+      open.set(element, count);
+    } else {
+      known += chargeE * count;
+    }
+  }
+  return neutralChoices(open, known, 1).length > 0;
 }
 
 function countElements(

@@ -6,7 +6,7 @@ import type { ErrorCode } from '#common/errors/error-codes';
 import { resolveCell } from '#common/physics/resolve-cell';
 import type { CellDefinition } from '#common/schemas/cell';
 import type { EvaluationResult, Warning } from '#common/schemas/evaluation';
-import { assignCharges } from '#server/cif/assign-charges';
+import { completeCharges, type CompletedCharges } from '#server/cif/complete-charges';
 import { readStructure, type ReadStructure } from '#server/cif/read-structure';
 import { evaluateCell } from '#server/electrostatics/evaluate-cell';
 import { symmetryOf } from '#server/symmetry/space-groups';
@@ -54,12 +54,14 @@ export async function evaluateFile(
 ): Promise<EvaluatedFile | FailedFile> {
   try {
     const structure = readStructure(await readText(path.resolve(folder, file)));
-    const { cell, warnings } = assignCharges(structure, charges);
+    const completed = completeCharges(structure, charges);
+    const { cell, warnings } = completed;
     const symmetry = symmetryOf(cell.symmetry);
     const { cell: resolved, problems } = resolveCell(cell, symmetry);
     if (!resolved) {
       throw asProblem(problems, structure);
     }
+    requireCharges(completed);
     const result = evaluateCell(resolved, method, {
       spaceGroupNumber: symmetry.setting?.number ?? null,
       spaceGroupSymbol: symmetry.setting?.symbol ?? null,
@@ -108,6 +110,20 @@ function asProblem(problems: readonly FieldProblem[], { siteLines }: ReadStructu
   const site = /^sites\.(\d+)/.exec(first.field)?.[1];
   const line = site === undefined ? undefined : siteLines[Number(site)];
   return new Problem(first.code as ErrorCode, first.message, line === undefined ? {} : { line });
+}
+
+function requireCharges({ missing, choices }: CompletedCharges): void {
+  if (missing.length === 0) {
+    return;
+  }
+  const names = missing.join(', ');
+  const option = missing.map((element) => `${element}=…`).join(',');
+  throw new Problem(
+    'cif.charges_needed',
+    choices.length === 0
+      ? `The file gives no oxidation numbers for ${names}, and common ones leave no neutral choice. Give them: --charges ${option}`
+      : `The file gives no oxidation numbers for ${names}, and several choices are neutral. Give one: --charges ${choices.join(' or ')}`,
+  );
 }
 
 function describe(error: unknown, onUnexpected: (error: unknown) => void): FailedFile['error'] {

@@ -16,8 +16,6 @@ import { findSetting, listSettings, operationsOf } from './space-groups.js';
 /** The tables never change under one address. */
 const forever = 'public, max-age=31536000, immutable';
 
-const hallNumberText = z.string().regex(/^\d{1,3}$/, 'A Hall number is a whole number, 1 to 530.');
-
 @ApiTags('Symmetry')
 @Controller('space-groups')
 export class SymmetryController {
@@ -35,7 +33,12 @@ export class SymmetryController {
   @Header('cache-control', forever)
   @ApiOperation({ summary: 'One setting with its symmetry operations' })
   @ApiResponse({ status: 200, standardSchema: spaceGroupDetail })
-  get(@Param('hallNumber', { schema: hallNumberText }) hallNumber: string): SpaceGroupDetail {
+  get(
+    @Param('hallNumber', {
+      schema: z.string().regex(/^\d{1,3}$/, 'A Hall number is a whole number, 1 to 530.'),
+    })
+    hallNumber: string,
+  ): SpaceGroupDetail {
     const setting = findSetting(Number(hallNumber));
     if (!setting) {
       throw new Problem('space_group.not_found');

@@ -2,7 +2,8 @@ import { Problem } from '#common/errors/problem';
 
 /** A word of a CIF with the line it starts on, counted from 1. */
 export type CifToken =
-  | { readonly kind: 'data' | 'save'; readonly name: string; readonly line: number }
+  | { readonly kind: 'data'; readonly name: string; readonly line: number }
+  | { readonly kind: 'save'; readonly name: string; readonly line: number }
   | { readonly kind: 'loop'; readonly line: number }
   | { readonly kind: 'tag'; readonly tag: string; readonly line: number }
   | {

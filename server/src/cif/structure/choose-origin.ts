@@ -14,8 +14,7 @@ interface Reading {
 
 /**
  * A symbol like `F d -3 m` has two origins in use. Where the file does not say which, its sites do:
- * only one origin gives the stated formula, a neutral compound, or puts every site on its special
- * position.
+ * only one origin gives the stated formula, a neutral compound, or puts them on special positions.
  * @throws Problem `cif.ambiguous_origin` when the sites fit both
  */
 export function chooseOrigin(
@@ -34,7 +33,7 @@ export function chooseOrigin(
   const tests: readonly [string, (reading: Reading) => boolean][] = [
     ['gives the stated formula', ({ counts }) => matchesFormula(counts, evidence.formula)],
     ['can be neutral', ({ counts }) => evidence.canBeNeutral(counts)],
-    ['has every site on its special position', ({ counts }) => isFewest(counts, readings)],
+    ['puts the sites on special positions', ({ counts }) => isFewest(counts, readings)],
   ];
   let left = readings;
   for (const [reason, passes] of tests) {

@@ -80,11 +80,18 @@ function readSite(
   return {
     label,
     element: ion.element,
-    chargeE: context.oxidationNumbers.get(type?.text ?? label) ?? ion.chargeE,
+    chargeE: chargeOf(type?.text ?? null, ion, context),
     coordinates: readCoordinates(row, read, loop, { lattice: context.lattice, label, line }),
     occupancy: occupancy ? numberOf(occupancy, '_atom_site_occupancy').digits : '1',
     line,
   };
+}
+
+/** The listed oxidation number of the type or its element, else the charge in the type symbol. */
+function chargeOf(type: string | null, ion: ReadIon, context: SiteContext): number | null {
+  const { oxidationNumbers } = context;
+  const ofType = type === null ? undefined : oxidationNumbers.get(type);
+  return ofType ?? ion.chargeE ?? oxidationNumbers.get(ion.element) ?? null;
 }
 
 function readIon(type: string | null, label: string, line: number): ReadIon {

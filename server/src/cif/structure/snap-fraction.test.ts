@@ -20,10 +20,19 @@ describe('rounded fractions', () => {
     expect(snapFraction(digits)).toBe(fraction);
   });
 
-  it.each(['0.33', '0.3', '0.3334', '0.3300', '0.3053', '0.33330', '0.25', '0', '1', '0.1667e1'])(
-    '%s is itself',
-    (digits) => {
-      expect(snapFraction(digits)).toBeNull();
-    },
-  );
+  it.each([
+    '0.33',
+    '0.083',
+    '0.3',
+    '0.3334',
+    '0.3300',
+    '0.3053',
+    '0.33330',
+    '0.25',
+    '0',
+    '1',
+    '0.1667e1',
+  ])('%s is itself', (digits) => {
+    expect(snapFraction(digits)).toBeNull();
+  });
 });

@@ -1,17 +1,15 @@
-/** Fractions of the tables' special positions that decimals can only round. */
-const roundedFractions: readonly [number, number][] = [
-  [1, 3],
-  [2, 3],
-  [1, 6],
-  [5, 6],
-  [1, 12],
-  [5, 12],
-  [7, 12],
-  [11, 12],
+/** Fractions of special positions that decimals can only round, and from how many decimals on. */
+const roundedFractions: readonly { numerator: number; denominator: number; decimals: number }[] = [
+  { numerator: 1, denominator: 3, decimals: 3 },
+  { numerator: 2, denominator: 3, decimals: 3 },
+  { numerator: 1, denominator: 6, decimals: 3 },
+  { numerator: 5, denominator: 6, decimals: 3 },
+  // Fewer decimals of a twelfth may well mean the decimal itself.
+  { numerator: 1, denominator: 12, decimals: 4 },
+  { numerator: 5, denominator: 12, decimals: 4 },
+  { numerator: 7, denominator: 12, decimals: 4 },
+  { numerator: 11, denominator: 12, decimals: 4 },
 ];
-
-/** Fewer decimals than this may well mean the decimal itself. */
-const fewestDecimals = 3;
 
 /**
  * A coordinate that is a rounded (or cut) third, sixth or twelfth becomes that fraction, so that
@@ -21,18 +19,18 @@ const fewestDecimals = 3;
  */
 export function snapFraction(digits: string): string | null {
   const match = /^([+-]?)(\d*)\.(\d+)$/.exec(digits);
-  const decimals = match?.[3]?.length ?? 0;
-  if (!match || decimals < fewestDecimals) {
+  if (!match) {
     return null;
   }
-  const whole = Number(match[2] || '0');
-  const part = Number(match[3]);
-  for (const [numerator, denominator] of roundedFractions) {
-    const exact = (numerator / denominator) * 10 ** decimals;
-    if (part === Math.round(exact) || part === Math.floor(exact)) {
-      const sign = match[1] === '-' ? '-' : '';
-      return `${sign}${whole * denominator + numerator}/${denominator}`;
-    }
+  const [, sign = '', whole = '', part = ''] = match;
+  const found = roundedFractions.find(({ numerator, denominator, decimals }) => {
+    const exact = (numerator / denominator) * 10 ** part.length;
+    const isRounded = Number(part) === Math.round(exact) || Number(part) === Math.floor(exact);
+    return part.length >= decimals && isRounded;
+  });
+  if (!found) {
+    return null;
   }
-  return null;
+  const numerator = Number(whole || '0') * found.denominator + found.numerator;
+  return `${sign === '-' ? '-' : ''}${numerator}/${found.denominator}`;
 }
