@@ -24,7 +24,7 @@ export default defineConfig({
     target: 'es2022',
     // No data: addresses, so that the content security policy can stay strict.
     assetsInlineLimit: 0,
-    chunkSizeWarningLimit: 900,
+    chunkSizeWarningLimit: 1000,
     rolldownOptions: {
       output: {
         codeSplitting: {

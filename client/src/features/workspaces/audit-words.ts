@@ -1,5 +1,6 @@
 const words: Partial<Record<string, string>> = {
   'auth.sign_in': 'signed in',
+  'auth.sign_in_failed': 'was refused at sign-in',
   'auth.sign_out': 'signed out',
   'auth.change_password': 'changed their password',
   'workspace.create': 'made the workspace',
