@@ -8,6 +8,7 @@ import { EmptyState } from '#client/components/empty-state.tsx';
 import { ErrorState } from '#client/components/error-state.tsx';
 import { Page } from '#client/components/page.tsx';
 import { CellForm } from '#client/features/cell-editor/components/cell-form.tsx';
+import { EnergyLine } from '#client/features/electrostatics/components/energy-line.tsx';
 import { useResolvedCell } from '#client/features/cell-editor/hooks/use-resolved-cell.ts';
 import { useLatticeAddress } from '#client/features/lattices/hooks/use-lattice-address.ts';
 import { sharedRevisionQuery } from '#client/features/sharing/api/shares.ts';
@@ -59,6 +60,7 @@ function Shown({ shared }: { shared: SharedRevision }): JSX.Element {
           <CellForm
             content={revision}
             resolved={resolved}
+            energy={<EnergyLine live={frozenEvaluation(revision)} />}
             serverProblems={revision.evaluationProblem?.fields ?? []}
             pickedLabels={nobody}
             edit={null}

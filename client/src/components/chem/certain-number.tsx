@@ -1,8 +1,8 @@
 import { Copy } from 'lucide-react';
-import { useId, useState, type JSX } from 'react';
+import { Fragment, useId, useState, type JSX } from 'react';
 
 import { certainDigits } from '#common/units/certain-digits';
-import { formatBound, plainNumberText } from '#common/units/format';
+import { formatBound, plainNumberText, THIN_SPACE } from '#common/units/format';
 import { useToast } from '#client/components/toast.tsx';
 import { classNames } from '#client/lib/class-names.ts';
 import { copyText } from '#client/lib/copy-text.ts';
@@ -21,6 +21,20 @@ interface CertainNumberProps {
   /** Leaves the unit out of sight; it is still copied and read aloud. */
   isUnitHidden?: boolean;
   className?: string;
+}
+
+/** Digits with a gap of fixed width between groups: the font's own thin space is hardly one. */
+function Digits({ text }: { text: string }): JSX.Element {
+  return (
+    <>
+      {text.split(THIN_SPACE).map((group, index) => (
+        <Fragment key={index}>
+          {index > 0 && <span className="inline-block w-[0.22em]">{THIN_SPACE}</span>}
+          {group}
+        </Fragment>
+      ))}
+    </>
+  );
 }
 
 function Note({
@@ -99,7 +113,7 @@ export function CertainNumber({
         onClick={copy}
         className="cursor-copy rounded-control text-left whitespace-nowrap decoration-faint decoration-dotted decoration-1 underline-offset-4 hover:underline"
       >
-        {text}
+        <Digits text={text} />
         {unit !== '' && (
           <>
             {' '}
@@ -125,7 +139,7 @@ export function CertainText({
       className="whitespace-nowrap"
       title={`certain to ± ${formatBound(bound)}${unit === '' ? '' : ` ${unit}`}`}
     >
-      {text}
+      <Digits text={text} />
     </span>
   );
 }

@@ -15,6 +15,7 @@ import {
   useEditorStore,
   useKeeperStatus,
 } from '#client/features/cell-editor/hooks/use-editor-store.ts';
+import { EnergyLine } from '#client/features/electrostatics/components/energy-line.tsx';
 import { useResolvedCell } from '#client/features/cell-editor/hooks/use-resolved-cell.ts';
 import { isSameContent } from '#client/features/cell-editor/model/editor-history.ts';
 import type { EditorStore } from '#client/features/cell-editor/model/editor-store.ts';
@@ -48,9 +49,22 @@ interface DraftViewProps {
 }
 
 /** The newest revision, where there is one. */
-function useHead({ latticeRef, lattice }: DraftViewProps): RevisionDetail | null {
-  return useQuery(revisionQuery(latticeRef, lattice.headRevision)).data ?? null;
+function useHead({ latticeRef, lattice }: DraftViewProps): {
+  head: RevisionDetail | null;
+  isLoading: boolean;
+} {
+  const { data, isLoading } = useQuery(revisionQuery(latticeRef, lattice.headRevision));
+  return { head: data ?? null, isLoading };
 }
+
+/** Before the newest revision is here one can't know whether its numbers are those of the draft. */
+const waiting: LiveEvaluation = {
+  evaluation: null,
+  isPending: false,
+  isBehind: true,
+  problem: null,
+  retry: null,
+};
 
 /** Takes in what others saved, where nothing here is unsaved, and says so. */
 function useOthersEdits(store: EditorStore, draft: Draft): void {
@@ -158,17 +172,18 @@ function Editor(props: DraftViewProps & { draft: Draft }): JSX.Element {
   const store = useEditorStore(latticeRef, draft);
   useOthersEdits(store, draft);
   const { present } = useEditorHistory(store);
-  const head = useHead(props);
+  const { head, isLoading } = useHead(props);
   const isEdited = head !== null && !isSameContent(present, head);
   const resolved = useResolvedCell(present.cell);
   const isReadable = resolved.cell !== null;
   const isHead = head !== null && !isEdited;
   const body = useMemo(
-    () => (isReadable && !isHead ? { cell: present.cell, method: present.method } : null),
-    [isReadable, isHead, present],
+    () =>
+      isReadable && !isHead && !isLoading ? { cell: present.cell, method: present.method } : null,
+    [isReadable, isHead, isLoading, present],
   );
   const computed = useLiveEvaluation(latticeRef.workspace, body);
-  const live = isHead ? frozenEvaluation(head) : computed;
+  const live = isLoading ? waiting : isHead ? frozenEvaluation(head) : computed;
   const annotations = useQuery(annotationsQuery(latticeRef, lattice.headRevision)).data ?? [];
   const startDraft = useStartDraft(store, props);
   const needsSaving = head === null ? lattice.headRevision === 0 : isEdited;
@@ -248,6 +263,7 @@ function Editor(props: DraftViewProps & { draft: Draft }): JSX.Element {
               latticeRef={latticeRef}
               store={store}
               resolved={resolved}
+              energy={<EnergyLine live={live} />}
               serverProblems={live.problem?.fields ?? []}
               pickedLabels={pickedLabels}
               canDiscard={isEdited}

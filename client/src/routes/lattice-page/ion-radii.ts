@@ -13,7 +13,7 @@ export function speciesRadiusA(speciesKey: string): number {
   const weight = parts.reduce((sum, part) => sum + part.occupancy, 0) || 1;
   const radiusA = parts.reduce(
     (sum, { element, charge, occupancy }) =>
-      sum + (occupancy / weight) * displayRadiusA(element, charge),
+      sum + (occupancy / weight) * displayRadiusA(element, charge).radiusA,
     0,
   );
   known.set(speciesKey, radiusA);

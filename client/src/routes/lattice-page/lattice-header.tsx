@@ -36,7 +36,7 @@ export function LatticeHeader({
 }): JSX.Element {
   return (
     <header className="flex flex-wrap items-center gap-x-4 gap-y-3">
-      <div className="flex min-w-0 flex-wrap items-baseline gap-x-4 gap-y-1">
+      <div className="flex min-w-0 flex-wrap items-baseline gap-x-6 gap-y-1">
         {name}
         <p className="flex flex-wrap items-center gap-x-3.5 gap-y-1 text-soft">
           {meta.formula !== null && <FormulaText formula={meta.formula} />}

@@ -97,6 +97,9 @@ function StageColumn(props: LatticeScreenProps): JSX.Element {
 
 /** In place of the numbers while the cell itself can't be read. */
 function Unreadable(props: LatticeScreenProps): JSX.Element {
+  if (props.resolved.isLoading) {
+    return <div className="min-h-96" />;
+  }
   const count = props.resolved.problems.length;
   return (
     <EmptyState

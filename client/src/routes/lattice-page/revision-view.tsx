@@ -8,6 +8,7 @@ import { ErrorState } from '#client/components/error-state.tsx';
 import { useToast } from '#client/components/toast.tsx';
 import { draftQuery, putDraft, readDraft } from '#client/features/cell-editor/api/draft.ts';
 import { CellForm } from '#client/features/cell-editor/components/cell-form.tsx';
+import { EnergyLine } from '#client/features/electrostatics/components/energy-line.tsx';
 import { useResolvedCell } from '#client/features/cell-editor/hooks/use-resolved-cell.ts';
 import { rememberUnsaved } from '#client/features/cell-editor/model/unsaved-copy.ts';
 import { pickedIons } from '#client/features/electrostatics/model/picked-ions.ts';
@@ -157,6 +158,7 @@ function Loaded(props: RevisionViewProps & { revision: RevisionDetail }): JSX.El
             <CellForm
               content={revision}
               resolved={resolved}
+              energy={<EnergyLine live={live} />}
               serverProblems={revision.evaluationProblem?.fields ?? []}
               pickedLabels={
                 new Set(

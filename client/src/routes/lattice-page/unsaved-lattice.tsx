@@ -5,6 +5,7 @@ import type { Draft, LatticeSummary } from '#common/schemas/lattice';
 import { ErrorState } from '#client/components/error-state.tsx';
 import { draftQuery } from '#client/features/cell-editor/api/draft.ts';
 import { CellForm } from '#client/features/cell-editor/components/cell-form.tsx';
+import { EnergyLine } from '#client/features/electrostatics/components/energy-line.tsx';
 import { useResolvedCell } from '#client/features/cell-editor/hooks/use-resolved-cell.ts';
 import { useLiveEvaluation } from '#client/features/electrostatics/hooks/use-live-evaluation.ts';
 import type { LatticeAddress } from '#client/features/lattices/hooks/use-lattice-address.ts';
@@ -73,6 +74,7 @@ function Loaded({
           <CellForm
             content={draft}
             resolved={resolved}
+            energy={<EnergyLine live={live} />}
             serverProblems={live.problem?.fields ?? []}
             pickedLabels={nobody}
             edit={null}

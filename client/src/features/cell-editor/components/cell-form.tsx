@@ -1,5 +1,5 @@
 import { CircleAlert } from 'lucide-react';
-import { useMemo, type JSX } from 'react';
+import { useMemo, type JSX, type ReactNode } from 'react';
 
 import { formatOperation } from '#common/physics/symmetry-operation';
 import type { FieldProblem } from '#common/errors/problem';
@@ -28,6 +28,8 @@ interface CellFormProps {
   /** What the server found when it evaluated the cell. */
   serverProblems: readonly FieldProblem[];
   pickedLabels: ReadonlySet<string>;
+  /** The energy of the cell, beside what else follows from it. */
+  energy?: ReactNode;
   /** Null shows the cell without letting it be changed. */
   edit: Edit | null;
 }
@@ -73,7 +75,7 @@ export function CellForm(props: CellFormProps): JSX.Element {
   };
   return (
     <div className="grid gap-6">
-      <LiveNumbers cell={resolved.shown} isStale={resolved.cell === null} />
+      <LiveNumbers cell={resolved.shown} isStale={resolved.cell === null} energy={props.energy} />
       <OtherProblems problems={problemsOutside(problems, (field) => formFields.test(field))} />
       <SymmetryFields
         symmetry={cell.symmetry}

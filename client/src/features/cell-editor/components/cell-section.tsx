@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { useState, type JSX } from 'react';
+import { useState, type JSX, type ReactNode } from 'react';
 
 import type { FieldProblem } from '#common/errors/problem';
 import { Button } from '#client/components/button.tsx';
@@ -23,6 +23,7 @@ interface CellSectionProps {
   resolved: ResolvedState;
   serverProblems: readonly FieldProblem[];
   pickedLabels: ReadonlySet<string>;
+  energy: ReactNode;
   /** There is a revision that the draft could go back to, and the draft differs from it. */
   canDiscard: boolean;
 }
@@ -103,6 +104,7 @@ export function CellSection(props: CellSectionProps): JSX.Element {
         resolved={props.resolved}
         serverProblems={props.serverProblems}
         pickedLabels={props.pickedLabels}
+        energy={props.energy}
         edit={(change, field) => store.edit(change, field)}
       />
     </div>

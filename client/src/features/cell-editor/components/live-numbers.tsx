@@ -27,10 +27,12 @@ interface LiveNumbersProps {
   cell: ResolvedCell | null;
   /** The cell shown is the last readable one: its numbers are not those of the form. */
   isStale: boolean;
+  /** The energy, where it is known. */
+  energy?: ReactNode;
 }
 
 /** What follows from the cell at once: formula, Z, volume, density, charges, contacts. */
-export function LiveNumbers({ cell, isStale }: LiveNumbersProps): JSX.Element | null {
+export function LiveNumbers({ cell, isStale, energy }: LiveNumbersProps): JSX.Element | null {
   if (cell === null) {
     return null;
   }
@@ -40,7 +42,7 @@ export function LiveNumbers({ cell, isStale }: LiveNumbersProps): JSX.Element | 
     <dl
       aria-label="What follows from the cell"
       className={classNames(
-        'grid grid-cols-[repeat(auto-fit,minmax(6.4rem,max-content))] gap-x-6 gap-y-2 rounded-control bg-wash px-4 py-3 transition-opacity duration-150',
+        'grid grid-cols-[repeat(auto-fit,minmax(4.2rem,max-content))] gap-x-6 gap-y-2 rounded-control bg-wash px-4 py-3 transition-opacity duration-150',
         isStale && 'opacity-55',
       )}
     >
@@ -54,6 +56,12 @@ export function LiveNumbers({ cell, isStale }: LiveNumbersProps): JSX.Element | 
       <Figure name={isCharged ? 'charges do not balance' : 'charge sum'} isWrong={isCharged}>
         {formatNetCharge(summary.chargeSumE)}
       </Figure>
+      {energy !== undefined && (
+        <div className="col-span-full">
+          <dt className="text-small text-soft">energy</dt>
+          <dd className="font-medium">{energy}</dd>
+        </div>
+      )}
       <div className="col-span-full">
         <dt className="text-small text-soft">shortest contacts</dt>
         <dd className="flex flex-wrap gap-x-4">

@@ -23,7 +23,12 @@ export const siteColumns: readonly {
   width: string;
 }[] = [
   { key: 'label', head: 'label', title: 'Name of the site', width: 'min-w-16' },
-  { key: 'element', head: 'element', title: 'Chemical symbol', width: 'min-w-12 max-w-16' },
+  {
+    key: 'element',
+    head: 'element',
+    title: 'Chemical symbol',
+    width: 'min-w-16 [&::-webkit-calendar-picker-indicator]:hidden!',
+  },
   {
     key: 'charge',
     head: 'charge',

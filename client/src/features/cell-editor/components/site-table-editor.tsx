@@ -54,7 +54,7 @@ export function SiteTableEditor(props: SiteTableEditorProps): JSX.Element {
                   key={column.key}
                   scope="col"
                   title={column.title}
-                  className="pb-1 text-left font-normal first:pl-1.5"
+                  className="pb-1 text-left font-normal whitespace-nowrap first:pl-1.5"
                 >
                   {column.head}
                 </th>

@@ -87,7 +87,6 @@ export function SpaceGroupField(props: SpaceGroupFieldProps): JSX.Element {
   const { setting, error } = props;
   const id = useId();
   const [typed, setTyped] = useState('');
-  const hint = setting === null ? undefined : setting.crystalSystem;
   return (
     <Combobox
       value={setting}
@@ -97,7 +96,7 @@ export function SpaceGroupField(props: SpaceGroupFieldProps): JSX.Element {
       onChange={(next: SpaceGroupSetting | null) => next !== null && props.onChange(next)}
       onClose={() => setTyped('')}
     >
-      <FieldFrame id={id} label="Space group" error={error} hint={hint}>
+      <FieldFrame id={id} label="Space group" error={error} className="grow">
         <span className="relative block">
           <ComboboxInput
             id={id}
@@ -105,7 +104,7 @@ export function SpaceGroupField(props: SpaceGroupFieldProps): JSX.Element {
             spellCheck={false}
             placeholder="Number or symbol"
             aria-invalid={error === null ? undefined : true}
-            aria-describedby={describedBy(id, error, hint)}
+            aria-describedby={describedBy(id, error, null)}
             displayValue={describe}
             onFocus={(event) => event.target.select()}
             onChange={(event) => setTyped(event.target.value)}

@@ -45,6 +45,7 @@ function OperationsField({
   const text = isCurrent ? typed : operations.join('\n');
   return (
     <TextAreaField
+      className="grow basis-80"
       label="Symmetry operations, one a line"
       rows={Math.min(8, operations.length + 1)}
       value={text}
@@ -66,7 +67,7 @@ export function SymmetryFields(props: SymmetryFieldsProps): JSX.Element {
   const { symmetry, problems, isReadOnly } = props;
   const error = messageFor(problems, 'symmetry');
   return (
-    <div className="grid gap-2">
+    <div className="flex flex-wrap items-start gap-x-3 gap-y-2">
       {symmetry.kind === 'setting' ? (
         <SpaceGroupField
           setting={props.setting}
@@ -85,7 +86,7 @@ export function SymmetryFields(props: SymmetryFieldsProps): JSX.Element {
       {!isReadOnly && (
         <Segmented
           label="How the symmetry is given"
-          className="justify-self-start"
+          className="h-9 items-stretch self-start [&>*]:flex [&>*]:items-center sm:mt-[22px]"
           value={symmetry.kind}
           options={[
             { value: 'setting', label: 'space group' },

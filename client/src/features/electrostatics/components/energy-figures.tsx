@@ -45,6 +45,22 @@ function Total({ result }: { result: EvaluationResult }): JSX.Element {
   );
 }
 
+/** Symbol of a constant; the tilde of M̃ is drawn here, since the font has none to set over a letter. */
+function Symbol({ symbol }: { symbol: string }): JSX.Element {
+  if (symbol !== 'M̃') {
+    return <span className="text-ink">{symbol}</span>;
+  }
+  return (
+    <span className="relative text-ink">
+      <span className="sr-only">M tilde</span>
+      <span aria-hidden>M</span>
+      <span aria-hidden className="absolute inset-x-0 -top-[0.3em] text-center leading-none">
+        ~
+      </span>
+    </span>
+  );
+}
+
 function Constant({
   symbol,
   caption,
@@ -73,7 +89,7 @@ function Constant({
         )}
       </dd>
       <dt className="text-small text-soft" title={convention}>
-        <span className="text-ink">{symbol}</span> {caption}
+        <Symbol symbol={symbol} /> {caption}
       </dt>
     </div>
   );

@@ -192,7 +192,7 @@ function Body({ children, isBehind }: { children: ReactNode; isBehind: boolean }
     <div
       role="rowgroup"
       className={classNames(
-        'relative col-span-full grid grid-cols-subgrid overflow-x-clip transition-opacity duration-150',
+        'relative col-span-full grid auto-rows-[31px] grid-cols-subgrid overflow-x-clip transition-opacity duration-150',
         'wide:max-h-[max(20rem,calc(100dvh-31rem))] wide:overflow-y-auto',
         isBehind && 'opacity-60',
       )}
@@ -250,7 +250,7 @@ export function PairLedger(props: PairLedgerProps): JSX.Element {
         />
         <div
           aria-hidden
-          className="pointer-events-none"
+          className="pointer-events-none relative"
           style={{ gridColumn: 4, gridRow: `1 / span ${bars.length}` }}
         >
           <RunningLine bars={bars} rowCount={bars.length} />

@@ -22,6 +22,12 @@ const views: readonly { value: PairLedger['view']; label: string; title: string 
   },
 ];
 
+const sliderLook =
+  'h-6 min-w-0 grow cursor-pointer appearance-none bg-transparent ' +
+  '[&::-webkit-slider-runnable-track]:h-[3px] [&::-webkit-slider-runnable-track]:rounded-full [&::-webkit-slider-runnable-track]:bg-line ' +
+  '[&::-webkit-slider-thumb]:-mt-1.5 [&::-webkit-slider-thumb]:size-[15px] [&::-webkit-slider-thumb]:appearance-none [&::-webkit-slider-thumb]:rounded-full [&::-webkit-slider-thumb]:bg-ink ' +
+  '[&::-moz-range-thumb]:size-[15px] [&::-moz-range-thumb]:border-0 [&::-moz-range-thumb]:bg-ink [&::-moz-range-track]:h-[3px] [&::-moz-range-track]:bg-line';
+
 /** How far the rows go, and whether each ion’s sphere is made neutral there. */
 export function ReachControls({
   choice,
@@ -36,7 +42,7 @@ export function ReachControls({
         Reach
         <input
           type="range"
-          className="h-6 min-w-0 grow cursor-pointer accent-ink"
+          className={sliderLook}
           min={range.minA}
           max={range.maxA}
           step={0.01}

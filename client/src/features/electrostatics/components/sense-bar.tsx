@@ -68,7 +68,10 @@ export function RunningLine({
       aria-hidden
       viewBox={`-1 0 2 ${Math.max(1, rowCount)}`}
       preserveAspectRatio="none"
-      className={classNames('pointer-events-none h-full w-full overflow-visible', className)}
+      className={classNames(
+        'pointer-events-none absolute inset-0 size-full overflow-visible',
+        className,
+      )}
     >
       <path d={across} fill="none" className="stroke-faint" vectorEffect="non-scaling-stroke" />
       <path

@@ -96,14 +96,14 @@ export function LatticeName({ latticeRef, name, mayRename }: LatticeNameProps): 
     );
   }
   return (
-    <div className="group flex min-w-0 items-center gap-1">
+    <div className="group relative flex min-w-0 items-center gap-1">
       <h1 className="min-w-0 text-title tracking-[-0.02em]">{name}</h1>
       {mayRename && (
         <IconButton
           label="Rename"
-          icon={<Pencil aria-hidden className="size-4" />}
+          icon={<Pencil aria-hidden className="size-3.5" />}
           onClick={() => setEditing(true)}
-          className="md:opacity-0 md:group-hover:opacity-100 md:focus-visible:opacity-100"
+          className="size-6! md:absolute md:left-full md:opacity-0 md:group-hover:opacity-100 md:focus-visible:opacity-100"
         />
       )}
     </div>

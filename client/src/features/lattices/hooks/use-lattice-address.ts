@@ -1,4 +1,4 @@
-import { useCallback, useMemo } from 'react';
+import { useCallback, useEffect, useMemo, useRef } from 'react';
 import { useSearchParams } from 'react-router-dom';
 
 import type { PairLedger } from '#common/schemas/evaluation';
@@ -85,13 +85,16 @@ export function writeLatticeAddress(
 export function useLatticeAddress(): [LatticeAddress, (change: Partial<LatticeAddress>) => void] {
   const [params, setParams] = useSearchParams();
   const address = useMemo(() => readLatticeAddress(params), [params]);
+  // Two changes may come in one event, before the router has rendered the first.
+  const latest = useRef(params);
+  useEffect(() => {
+    latest.current = params;
+  }, [params]);
   const update = useCallback(
-    (change: Partial<LatticeAddress>) =>
-      // Read from the bar, not from the last render: two changes may come in one event.
-      setParams(() => writeLatticeAddress(new URLSearchParams(window.location.search), change), {
-        replace: true,
-        preventScrollReset: true,
-      }),
+    (change: Partial<LatticeAddress>) => {
+      latest.current = writeLatticeAddress(latest.current, change);
+      setParams(latest.current, { replace: true, preventScrollReset: true });
+    },
     [setParams],
   );
   return [address, update];
