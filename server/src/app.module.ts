@@ -3,12 +3,14 @@ import { ScheduleModule } from '@nestjs/schedule';
 
 import { AuditModule } from '#server/audit/audit.module';
 import { AuthModule } from '#server/auth/auth.module';
+import { CifModule } from '#server/cif/cif.module';
 import { ConfigModule } from '#server/config/config.module';
 import { DatabaseModule } from '#server/database/database.module';
 import { HealthModule } from '#server/health/health.module';
 import { HttpModule } from '#server/http/http.module';
 import { StaticClientModule } from '#server/http/static-client.module';
 import { InstallationModule } from '#server/installation/installation.module';
+import { PrototypesModule } from '#server/prototypes/prototypes.module';
 import { SymmetryModule } from '#server/symmetry/symmetry.module';
 import { UsersModule } from '#server/users/users.module';
 import { WorkspacesModule } from '#server/workspaces/workspaces.module';
@@ -26,6 +28,8 @@ import { WorkspacesModule } from '#server/workspaces/workspaces.module';
     AuthModule,
     WorkspacesModule,
     SymmetryModule,
+    CifModule,
+    PrototypesModule,
     StaticClientModule,
   ],
 })
