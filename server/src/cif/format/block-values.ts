@@ -2,6 +2,7 @@ import { Problem } from '#common/errors/problem';
 
 import { isMissing, type CifBlock, type CifLoop, type CifValue } from './cif-document.js';
 import { readCifNumber, type CifNumber } from './cif-number.js';
+import { shortened } from './shortened.js';
 
 /** The first of these data names that has a known value, single or in a loop of one row. */
 export function findValue(block: CifBlock, ...tags: readonly string[]): CifValue | null {
@@ -56,7 +57,7 @@ export function numberOf(value: CifValue, tag: string): CifNumber {
   if (!number) {
     throw new Problem(
       'cif.bad_value',
-      `Line ${value.line}: ${tag} is “${value.text}”, which is not a number.`,
+      `Line ${value.line}: ${tag} is “${shortened(value.text)}”, which is not a number.`,
       { line: value.line },
     );
   }

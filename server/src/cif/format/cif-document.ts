@@ -1,6 +1,7 @@
 import { Problem } from '#common/errors/problem';
 
 import { cifProblem, tokenise, type CifToken } from './cif-tokens.js';
+import { shortened } from './shortened.js';
 
 /** One value with the line it stands on. */
 export interface CifValue {
@@ -155,8 +156,4 @@ function intoRows(tags: readonly string[], values: readonly CifValue[]): CifValu
     );
   }
   return rows;
-}
-
-function shortened(text: string): string {
-  return text.length > 30 ? `${text.slice(0, 30)}…` : text;
 }

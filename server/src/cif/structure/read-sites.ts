@@ -1,9 +1,11 @@
 import { Problem } from '#common/errors/problem';
 import { cartesianToFractional, cellVectors } from '#common/physics/cell-metric';
+import { cellLimits } from '#common/schemas/cell';
 import type { Warning } from '#common/schemas/evaluation';
 
 import { columnReader, findLoop, numberOf } from '../format/block-values.js';
 import type { CifBlock, CifLoop, CifValue } from '../format/cif-document.js';
+import { shortened } from '../format/shortened.js';
 import type { ReadLattice } from './read-lattice.js';
 import { snapFraction } from './snap-fraction.js';
 import { readLabelElement, readTypeSymbol, type ReadIon } from './type-symbol.js';
@@ -21,6 +23,9 @@ export interface ReadSite {
 
 const fractionalTags = ['_atom_site_fract_x', '_atom_site_fract_y', '_atom_site_fract_z'] as const;
 const cartesianTags = ['_atom_site_cartn_x', '_atom_site_cartn_y', '_atom_site_cartn_z'] as const;
+
+/** Leaves room for the mark that tells repeated labels apart. */
+const longestLabel = cellLimits.labelLength - 5;
 
 type Column = ReturnType<typeof columnReader>;
 
@@ -40,6 +45,7 @@ export function readSites(block: CifBlock, lattice: ReadLattice, warnings: Warni
       line: block.line,
     });
   }
+  requireFewEnough(loop);
   const oxidationNumbers = readOxidationNumbers(block);
   const isotopes = new Set<string>();
   const read = columnReader(loop);
@@ -57,6 +63,16 @@ export function readSites(block: CifBlock, lattice: ReadLattice, warnings: Warni
   return withDistinctLabels(sites, warnings);
 }
 
+function requireFewEnough({ rows, line }: CifLoop): void {
+  if (rows.length > cellLimits.definedSites) {
+    throw new Problem(
+      'cell.too_many_sites',
+      `The file lists ${rows.length} sites; at most ${cellLimits.definedSites} are taken.`,
+      { line },
+    );
+  }
+}
+
 interface SiteContext {
   readonly lattice: ReadLattice;
   readonly oxidationNumbers: ReadonlyMap<string, number>;
@@ -71,7 +87,9 @@ function readSite(
 ): ReadSite {
   const line = row[0]!.line;
   const type = read(row, '_atom_site_type_symbol');
-  const label = read(row, '_atom_site_label')?.text ?? type?.text ?? '';
+  const label = (read(row, '_atom_site_label')?.text ?? type?.text ?? '')
+    .trim()
+    .slice(0, longestLabel);
   const ion = readIon(type?.text ?? null, label, line);
   if (ion.isotope !== null) {
     context.isotopes.add(ion.isotope);
@@ -99,7 +117,7 @@ function readIon(type: string | null, label: string, line: number): ReadIon {
   if (!ion) {
     throw new Problem(
       'cif.bad_value',
-      `Line ${line}: no element can be made out of “${type ?? label}”.`,
+      `Line ${line}: no element can be made out of “${shortened(type ?? label)}”.`,
       { line },
     );
   }

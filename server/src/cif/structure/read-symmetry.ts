@@ -12,6 +12,7 @@ import {
 
 import { findValue, numberOf } from '../format/block-values.js';
 import type { CifBlock, CifValue } from '../format/cif-document.js';
+import { shortened } from '../format/shortened.js';
 import { fitsSetting } from './fits-cell.js';
 import type { ReadLattice } from './read-lattice.js';
 import { readOperations } from './read-operations.js';
@@ -103,7 +104,7 @@ function warnOfConflict(
       code: 'cif.symmetry_conflict',
       message:
         `The ${operations.length} listed operations are those of ${setting.symbol} (no. ${setting.number}), ` +
-        `but the file names ${symbol?.text ?? 'the group'} (no. ${declared}). The operations were taken.`,
+        `but the file names ${symbol ? shortened(symbol.text) : 'the group'} (no. ${declared}). The operations were taken.`,
     });
   }
 }
@@ -124,8 +125,8 @@ function fromHallSymbol(
   warnings.push({
     code: 'cif.hall_symbol_passed_over',
     message: setting
-      ? `The Hall symbol “${value.text}” does not fit the shape of the cell; the other names were used.`
-      : `The Hall symbol “${value.text}” is not a tabulated one; the other names were used.`,
+      ? `The Hall symbol “${shortened(value.text)}” does not fit the shape of the cell; the other names were used.`
+      : `The Hall symbol “${shortened(value.text)}” is not a tabulated one; the other names were used.`,
   });
   return null;
 }
@@ -143,18 +144,18 @@ function fromSymbol(
   if (found.length === 0) {
     warnings.push({
       code: 'cif.symbol_passed_over',
-      message: `Line ${value.line}: there is no space group “${value.text}”; the number was used.`,
+      message: `Line ${value.line}: there is no space group “${shortened(value.text)}”; the number was used.`,
     });
     if (!findValue(block, ...numberTags)) {
       throw new Problem(
         'cif.symmetry',
-        `Line ${value.line}: there is no space group “${value.text}”, and no operations are listed.`,
+        `Line ${value.line}: there is no space group “${shortened(value.text)}”, and no operations are listed.`,
         { line: value.line },
       );
     }
     return null;
   }
-  return narrowed(found, lattice, value, value.text);
+  return narrowed(found, lattice, value, shortened(value.text));
 }
 
 function fromNumber(block: CifBlock, lattice: ReadLattice): ReadSymmetry | null {
@@ -167,7 +168,7 @@ function fromNumber(block: CifBlock, lattice: ReadLattice): ReadSymmetry | null 
   if (found.length === 0) {
     throw new Problem(
       'cif.symmetry',
-      `Line ${value.line}: there is no space group ${value.text}.`,
+      `Line ${value.line}: there is no space group ${shortened(value.text)}.`,
       {
         line: value.line,
       },
@@ -178,7 +179,7 @@ function fromNumber(block: CifBlock, lattice: ReadLattice): ReadSymmetry | null 
     ({ isStandard, setting, crystalSystem }) =>
       isStandard || setting === '1' || setting === 'R' || crystalSystem === 'monoclinic',
   );
-  return narrowed(usual, lattice, value, `number ${value.text}`);
+  return narrowed(usual, lattice, value, `number ${shortened(value.text)}`);
 }
 
 /** Leaves what fits the cell's shape; if only the origin is open then, the sites must tell. */
