@@ -70,7 +70,9 @@ export function readSymbol(text: string): ReadSymbol {
   if (mark !== null && /^[hr]$/.test(mark)) {
     mark = mark.toUpperCase();
   }
-  return { key: symbolKey(rest), mark };
+  const key = symbolKey(rest);
+  // Protein files write `H -3 m` for the hexagonal axes of `R -3 m`.
+  return key.startsWith('H') ? { key: `R${key.slice(1)}`, mark: mark ?? 'H' } : { key, mark };
 }
 
 function symbolKey(symbol: string): string {
