@@ -10,6 +10,10 @@ export type NeighbourVisitor = (
   distanceA: number,
   /** Lattice translation of the image, in cell vectors. */
   image: readonly [number, number, number],
+  /** Cartesian components in Å of the vector from the central site to the neighbour. */
+  dxA: number,
+  dyA: number,
+  dzA: number,
 ) => void;
 
 /** Sites sorted into bins of the cell, ready for range queries over all periodic images. */
@@ -98,7 +102,7 @@ function visitBin(
     const dz = grid.positionsA[3 * j + 2]! + sz - centreA[2];
     const square = dx * dx + dy * dy + dz * dz;
     if (square <= radiusA * radiusA) {
-      visit(j, Math.sqrt(square), image);
+      visit(j, Math.sqrt(square), image, dx, dy, dz);
     }
   }
 }
@@ -127,9 +131,9 @@ export function forEachNeighbour(
   );
   const span = grid.binsPerAxis.map((bins, axis) => Math.ceil((radiusA * bins) / heights[axis]!));
   const [nx, ny, nz] = grid.binsPerAxis;
-  const withoutSelf: NeighbourVisitor = (j, distanceA, image) => {
+  const withoutSelf: NeighbourVisitor = (j, distanceA, image, dxA, dyA, dzA) => {
     if (j !== siteIndex || image[0] !== 0 || image[1] !== 0 || image[2] !== 0) {
-      visit(j, distanceA, image);
+      visit(j, distanceA, image, dxA, dyA, dzA);
     }
   };
   for (let x = home[0]! - span[0]!; x <= home[0]! + span[0]!; x += 1) {
