@@ -24,7 +24,7 @@ interface Disc {
 /** Ions as discs of the stage; of large blocks only as many as a letter could meet. */
 function discsOf(block: Block, ionScale: number, projection: Projection): Disc[] {
   const discs: Disc[] = [];
-  const step = Math.max(1, Math.floor(block.count / 1500));
+  const step = Math.max(1, Math.floor(block.count / 500));
   for (let index = 0; index < block.count; index += step) {
     const { x, y, depthA } = projection.toStage(positionAt(block, index));
     const radius = projection.toPixels(drawnRadiusA(block, index, ionScale), depthA);
@@ -60,6 +60,17 @@ function candidates(edges: readonly CellEdge[], axis: 0 | 1 | 2): Candidate[] {
     );
 }
 
+/** An axis that points at the viewer shows no edge to write on; the compass still names it. */
+function isEndOn(edges: readonly CellEdge[], axis: 0 | 1 | 2, projection: Projection): boolean {
+  const longest = edges
+    .filter((edge) => edge.axis === axis && edge.isFirstCell)
+    .map(({ from, to }) => {
+      const [start, end] = [projection.toStage(from), projection.toStage(to)];
+      return Math.hypot(end.x - start.x, end.y - start.y);
+    });
+  return Math.max(...longest) < 5 * roomPx;
+}
+
 /**
  * A place on an edge of the first cell for each of a, b, c, clear of every ion on the stage where
  * there is one; otherwise the clearest there is. Lower and nearer edges are preferred.
@@ -73,6 +84,9 @@ export function placeEdgeLetters(
   const discs = discsOf(block, ionScale, projection);
   const placed: EdgeLetter[] = [];
   for (const axis of [0, 1, 2] as const) {
+    if (isEndOn(edges, axis, projection)) {
+      continue;
+    }
     let best: EdgeLetter | null = null;
     let bestScore = -Infinity;
     for (const { at, preference } of candidates(edges, axis)) {

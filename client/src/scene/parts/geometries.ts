@@ -1,12 +1,12 @@
 import {
   BufferAttribute,
-  BufferGeometry,
   Color,
   InstancedBufferAttribute,
   InstancedBufferGeometry,
   InstancedInterleavedBuffer,
   InterleavedBufferAttribute,
   PlaneGeometry,
+  type BufferGeometry,
 } from 'three';
 
 import type { RibbonBatch, SphereBatch, StrutBatch } from '../model/drawing.ts';

@@ -5,6 +5,7 @@ import { clearBuffer, pack, type RasterBuffer } from './raster-buffer.ts';
 import { dotSpacing, drawRibbon, type ScreenRibbon } from './raster-ribbon.ts';
 import { drawBall, drawHalo, drawMark, type ScreenBall } from './raster-sphere.ts';
 import { drawStrut, type ScreenStrut } from './raster-strut.ts';
+import { StrutTables, type StrutEnds } from './raster-strut-tables.ts';
 import { buildPalette, fadeSteps } from './raster-tones.ts';
 
 /** Everything a picture shows. */
@@ -30,6 +31,7 @@ export interface RasterCamera {
   readonly pixelRatio: number;
 }
 
+const unknownColour: Rgb = [128, 128, 128];
 /** Contact shading costs about as much as the balls; large blocks do without. */
 const haloBallLimit = 1_200;
 const depthBins = 2048;
@@ -37,6 +39,16 @@ const depthBins = 2048;
 /** Draws frames into a buffer; keeps palettes and scratch arrays between them. */
 export class Rasteriser {
   private palettes = new Map<number, Uint32Array>();
+  private readonly strutTables = new StrutTables();
+  private readonly ends: StrutEnds = {
+    firstColour: 0,
+    lastColour: 0,
+    one: unknownColour,
+    other: unknownColour,
+    paper: unknownColour,
+    fade0: 0,
+    fade1: 0,
+  };
   private inkKey = '';
   private colours: Rgb[] = [];
   private paper: Rgb = [255, 255, 255];
@@ -58,8 +70,6 @@ export class Rasteriser {
     ax: 0,
     ay: 0,
     az: 0,
-    fade0: 0,
-    fade1: 0,
     focalPx: 0,
   };
   private readonly ribbon: ScreenRibbon = {
@@ -90,6 +100,7 @@ export class Rasteriser {
     }
     this.inkKey = key;
     this.palettes.clear();
+    this.strutTables.clear();
     this.colours = scene.palette.map(parseHex);
     this.paper = parseHex(scene.paper);
     this.ground = groundPixels(this.paper, parseHex(scene.foot), buffer.width, buffer.height);
@@ -118,7 +129,7 @@ export class Rasteriser {
     const key = colour * (fadeSteps + 1) + step;
     let palette = this.palettes.get(key);
     if (palette === undefined) {
-      const body = this.colours[colour] ?? [128, 128, 128];
+      const body = this.colours[colour] ?? unknownColour;
       palette = buildPalette(body, this.paper, step / fadeSteps);
       this.palettes.set(key, palette);
     }
@@ -232,7 +243,7 @@ export class Rasteriser {
     if (depth0 <= 0 || depth1 <= 0) {
       return;
     }
-    const length = Math.hypot(bx - ax, by - ay, depth1 - depth0) || 1;
+    const length = lengthOf(bx - ax, by - ay, depth1 - depth0);
     strut.x0 = buffer.width / 2 + (ax * camera.focalPx) / depth0;
     strut.y0 = buffer.height / 2 - (ay * camera.focalPx) / depth0;
     strut.x1 = buffer.width / 2 + (bx * camera.focalPx) / depth1;
@@ -243,13 +254,16 @@ export class Rasteriser {
     strut.ax = (bx - ax) / length;
     strut.ay = (by - ay) / length;
     strut.az = (depth0 - depth1) / length;
-    strut.fade0 = fadeAt(depth0, camera.nearA, camera.farA);
-    strut.fade1 = fadeAt(depth1, camera.nearA, camera.farA);
     strut.focalPx = camera.focalPx;
-    const grey: Rgb = [128, 128, 128];
-    const first = this.colours[batch.colours[index * 2]!] ?? grey;
-    const last = this.colours[batch.colours[index * 2 + 1]!] ?? grey;
-    drawStrut(buffer, strut, first, last, this.paper);
+    const { ends } = this;
+    ends.firstColour = batch.colours[index * 2]!;
+    ends.lastColour = batch.colours[index * 2 + 1]!;
+    ends.one = this.colours[ends.firstColour] ?? unknownColour;
+    ends.other = this.colours[ends.lastColour] ?? unknownColour;
+    ends.paper = this.paper;
+    ends.fade0 = fadeAt(depth0, camera.nearA, camera.farA);
+    ends.fade1 = fadeAt(depth1, camera.nearA, camera.farA);
+    drawStrut(buffer, strut, ends, this.strutTables);
   }
 
   private drawRibbons(buffer: RasterBuffer, batch: RibbonBatch, camera: RasterCamera): void {
@@ -279,6 +293,11 @@ export class Rasteriser {
       }
     }
   }
+}
+
+/** Math.hypot is many times slower and guards against what lengths in Å never reach. */
+function lengthOf(x: number, y: number, z: number): number {
+  return Math.sqrt(x * x + y * y + z * z) || 1;
 }
 
 /** Raised marks are nearly white in both themes: they stand on coloured balls. */
