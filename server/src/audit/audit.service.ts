@@ -36,7 +36,7 @@ export class AuditService {
     const actor: AuditActor = isContext(who)
       ? {
           userId: who.user.id,
-          workspaceId: 'workspace' in who ? (who as RequestContext).workspace.id : null,
+          workspaceId: 'workspace' in who ? who.workspace.id : null,
           address: who.address,
         }
       : who;

@@ -3,10 +3,9 @@ import { createHash } from 'node:crypto';
 import { Inject, Injectable, type OnApplicationShutdown } from '@nestjs/common';
 import connectPgSimple from 'connect-pg-simple';
 import session, { Store, type SessionData } from 'express-session';
-import type { Pool } from 'pg';
 
 import { Clock } from '#server/config/clock';
-import { DATABASE_POOL } from '#server/database/database';
+import { DATABASE_POOL, type DatabasePool } from '#server/database/database';
 
 import { sessionAbsoluteMs } from './session-limits.js';
 
@@ -28,7 +27,7 @@ export class HashedSessionStore extends Store implements OnApplicationShutdown {
   private readonly inner: InstanceType<typeof PgStore>;
 
   constructor(
-    @Inject(DATABASE_POOL) pool: Pool,
+    @Inject(DATABASE_POOL) pool: DatabasePool,
     private readonly clock: Clock,
   ) {
     super();
@@ -57,7 +56,7 @@ export class HashedSessionStore extends Store implements OnApplicationShutdown {
     this.inner.destroy(storedKey(sessionId), callback);
   }
 
-  async onApplicationShutdown(): Promise<void> {
-    await this.inner.close();
+  onApplicationShutdown(): void {
+    this.inner.close();
   }
 }

@@ -9,6 +9,8 @@ export const DATABASE_POOL = Symbol('DATABASE_POOL');
 
 export type Database = NodePgDatabase;
 
+export type DatabasePool = Pool;
+
 /** What a callback of {@link withTransaction} gets. */
 export type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
 
