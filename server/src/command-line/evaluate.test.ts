@@ -90,7 +90,7 @@ describe('evaluating the shipped structures', () => {
   beforeAll(async () => {
     const files = names.map((name) => `${name}.cif`);
     run = await evaluate([...files, '--tolerance', '1e-13'], structures);
-  }, 120_000);
+  }, 180_000);
 
   it('ends with 0 and one line for each, in order, and nothing else', () => {
     expect(run.stderr).toBe('');
@@ -185,7 +185,7 @@ describe('files that fail', () => {
     ]);
     expect(lines[3]).toMatchObject({ ok: false, error: { line: 16 } });
     expect(lines[5]).toMatchObject({ ok: true, formula: 'NaCl' });
-  }, 60_000);
+  }, 180_000);
 
   it('ask for charges that are not neutral or not known', async () => {
     const salt = path.join(fixtures, 't02_hm_nospace.cif');
@@ -202,7 +202,7 @@ describe('files that fail', () => {
     const unknown = await evaluate(['alloy.cif'], folder);
     expect(unknown.lines[0]).toMatchObject({ ok: false, error: { code: 'cif.charges_needed' } });
     expect((unknown.lines[0]!['error'] as { message: string }).message).toContain('--charges Na=…');
-  }, 60_000);
+  }, 180_000);
 
   it('names files relative to where npm was called', async () => {
     const run = await evaluate(['rock-salt.cif'], root, {
@@ -211,7 +211,7 @@ describe('files that fail', () => {
     });
     expect(run.code).toBe(0);
     expect(run.lines[0]).toMatchObject({ file: 'rock-salt.cif', ok: true });
-  }, 60_000);
+  }, 180_000);
 
   it.each([[[]], [['rock-salt.cif', '--tolerance', '2']], [['rock-salt.cif', '--loud']]])(
     'a wrong call %j ends with 2 and says so on stderr',
@@ -221,7 +221,7 @@ describe('files that fail', () => {
       expect(run.lines).toEqual([]);
       expect(run.stderr).toContain('Usage: npm run --silent evaluate');
     },
-    60_000,
+    180_000,
   );
 });
 
