@@ -108,10 +108,10 @@ export function Component(): JSX.Element {
   const { token = '' } = useParams();
   return (
     <div className="flex min-h-dvh flex-col">
-      <div className="flex h-14 items-center gap-4 border-b border-line px-4 md:px-7">
+      <header className="flex h-14 items-center gap-4 border-b border-line px-4 md:px-7">
         <Logo />
         <span className="text-soft">shared revision</span>
-      </div>
+      </header>
       <main id="main" tabIndex={-1} className="grow">
         <Content key={token} token={token} />
       </main>

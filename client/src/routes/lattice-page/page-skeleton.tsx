@@ -6,6 +6,7 @@ import { Skeleton } from '#client/components/skeleton.tsx';
 export function PageSkeleton(): JSX.Element {
   return (
     <div role="status" aria-label="Loading the lattice">
+      <h1 className="sr-only">Lattice</h1>
       <Skeleton className="h-8 w-72 max-w-full" />
       <Skeleton className="mt-6 w-96 max-w-full" />
       <div className="mt-6 grid gap-8 wide:grid-cols-[minmax(0,1fr)_minmax(32.5rem,41%)]">

@@ -6,6 +6,7 @@ import { pickedIons } from '#client/features/electrostatics/model/picked-ions.ts
 import type { LatticeAddress } from '#client/features/lattices/hooks/use-lattice-address.ts';
 import { RemarksSection } from '#client/features/review/components/remarks-section.tsx';
 import type { LatticeRef } from '#client/lib/lattice-keys.ts';
+import { frontIonId } from '#client/routes/lattice-page/front-ion.ts';
 
 interface RemarksPanelProps {
   latticeRef: LatticeRef;
@@ -33,8 +34,8 @@ export function RemarksPanel(props: RemarksPanelProps): JSX.Element {
     if (anchor.kind === 'pair') {
       update({ remark: number, row: anchor.key, picked: [] });
     } else if (anchor.kind === 'site') {
-      const siteIndex = cell?.sites.findIndex((site) => site.label === anchor.label) ?? -1;
-      update({ remark: number, picked: siteIndex === -1 ? [] : [`${siteIndex}.0.0.0`] });
+      const id = cell === null ? null : frontIonId(cell, anchor.label);
+      update({ remark: number, picked: id === null ? [] : [id] });
     }
   };
   return (

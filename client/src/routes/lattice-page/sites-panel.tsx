@@ -7,6 +7,7 @@ import { IonText } from '#client/components/chem/ion-text.tsx';
 import { ShellTable } from '#client/features/electrostatics/components/shell-table.tsx';
 import { SiteResults } from '#client/features/electrostatics/components/site-results.tsx';
 import { isRowOf, type PickedIon } from '#client/features/electrostatics/model/picked-ions.ts';
+import { frontIonId } from '#client/routes/lattice-page/front-ion.ts';
 
 interface SitesPanelProps {
   cell: ResolvedCell | null;
@@ -63,9 +64,9 @@ export function SitesPanel(props: SitesPanelProps): JSX.Element {
   const { cell, result, picked } = props;
   const ion = picked.at(-1);
   const pick = (site: SiteResult): void => {
-    const siteIndex = cell?.sites.findIndex((one) => one.label === site.label) ?? -1;
+    const id = cell === null ? null : frontIonId(cell, site.label);
     const isPicked = ion?.site.label === site.label;
-    props.onPick(siteIndex === -1 || isPicked ? [] : [`${siteIndex}.0.0.0`]);
+    props.onPick(id === null || isPicked ? [] : [id]);
   };
   return (
     <div className="grid gap-7">

@@ -16,7 +16,7 @@ function Figure({
   isWrong?: boolean;
 }): JSX.Element {
   return (
-    <div>
+    <div className="whitespace-nowrap">
       <dt className="text-small text-soft">{name}</dt>
       <dd className={classNames('font-medium', isWrong && 'text-fails')}>{children}</dd>
     </div>
@@ -42,7 +42,7 @@ export function LiveNumbers({ cell, isStale, energy }: LiveNumbersProps): JSX.El
     <dl
       aria-label="What follows from the cell"
       className={classNames(
-        'grid grid-cols-[repeat(auto-fit,minmax(4.2rem,max-content))] gap-x-6 gap-y-2 rounded-control bg-wash px-4 py-3 transition-opacity duration-150',
+        'flex flex-wrap gap-x-7 gap-y-2 rounded-control bg-wash px-4 py-3 transition-opacity duration-150',
         isStale && 'opacity-55',
       )}
     >
@@ -57,12 +57,12 @@ export function LiveNumbers({ cell, isStale, energy }: LiveNumbersProps): JSX.El
         {formatNetCharge(summary.chargeSumE)}
       </Figure>
       {energy !== undefined && (
-        <div className="col-span-full">
+        <div className="basis-full">
           <dt className="text-small text-soft">energy</dt>
           <dd className="font-medium">{energy}</dd>
         </div>
       )}
-      <div className="col-span-full">
+      <div className="basis-full">
         <dt className="text-small text-soft">shortest contacts</dt>
         <dd className="flex flex-wrap gap-x-4">
           {summary.contacts.slice(0, 4).map((contact) => (

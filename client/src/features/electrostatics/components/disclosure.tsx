@@ -19,7 +19,7 @@ export function Disclosure({
           aria-hidden
           className="size-4 shrink-0 self-center text-soft transition-transform duration-100 group-open:rotate-90"
         />
-        <span className="font-medium">{title}</span>
+        <span className="font-medium whitespace-nowrap">{title}</span>
         {note !== undefined && <span className="text-small text-soft">{note}</span>}
       </summary>
       <div className="pb-5 pl-6">{children}</div>

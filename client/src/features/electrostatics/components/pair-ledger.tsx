@@ -84,7 +84,7 @@ function Line({ row, bar, index, decimals, remarks, ...state }: LineProps): JSX.
         rowLook,
         'cursor-pointer scroll-my-8 -outline-offset-2 hover:bg-raised/70',
         state.isSelected && 'bg-raised shadow-[inset_3px_0_0_var(--ink)]',
-        !state.isSelected && state.isTouched && 'bg-wash shadow-[inset_3px_0_0_var(--faint)]',
+        !state.isSelected && state.isTouched && 'shadow-[inset_3px_0_0_var(--faint)]',
       )}
     >
       <span role="gridcell" className="flex items-center gap-1.5 pl-2.5 whitespace-nowrap">

@@ -31,15 +31,22 @@ export function usePairLedger(
   return { ledger, isBehind: reachA !== choice.reachA || view !== choice.view };
 }
 
+/** More pairs than this make the slider lag. */
+const mostPairs = 2e6;
+
+/** Reach within which a cell has at most {@link mostPairs} pairs. */
+function affordableReachA(cell: ResolvedCell): number {
+  return Math.cbrt((3 * mostPairs * cell.volumeA3) / (4 * Math.PI * cell.sites.length ** 2));
+}
+
 /** Ends of the reach slider: from the first shell to a good way past the default. */
 export function reachRange(
   cell: ResolvedCell | null,
   result: EvaluationResult,
-): {
-  minA: number;
-  maxA: number;
-} {
+): { minA: number; maxA: number } {
   const shortest = result.shortestUnlikeDistanceA ?? result.shortestDistanceA;
   const usual = cell === null ? result.pairLedger.reachA : defaultReachA(cell);
-  return { minA: shortest, maxA: Math.max(usual * 1.8, shortest * 4) };
+  const wanted = Math.max(usual * 1.8, shortest * 4);
+  const affordable = cell === null ? wanted : affordableReachA(cell);
+  return { minA: shortest, maxA: Math.max(usual, Math.min(wanted, affordable)) };
 }

@@ -89,24 +89,27 @@ export function CreateForm(props: CreateFormProps): JSX.Element {
           {warning.message}
         </p>
       ))}
-      {props.preview?.(props.cell)}
-      <TextField
-        label="Name"
-        value={name}
-        maxLength={120}
-        error={nameError}
-        onChange={(event) => setTypedName(event.target.value)}
-      />
+      <div className="flex flex-wrap items-start gap-3">
+        <TextField
+          label="Name"
+          value={name}
+          maxLength={120}
+          error={nameError}
+          onChange={(event) => setTypedName(event.target.value)}
+          className="grow basis-56"
+        />
+        <Button
+          type="submit"
+          variant="primary"
+          isBusy={create.isPending}
+          disabled={props.isBusy ?? false}
+          className="sm:mt-[22px]"
+        >
+          Create the lattice
+        </Button>
+      </div>
       <InlineError error={create.error} />
-      <Button
-        type="submit"
-        variant="primary"
-        isBusy={create.isPending}
-        disabled={props.isBusy ?? false}
-        className="justify-self-start"
-      >
-        Create the lattice
-      </Button>
+      {props.preview?.(props.cell)}
     </form>
   );
 }

@@ -78,7 +78,7 @@ function Entry({
       )}
     >
       <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1 pr-2">
-        <h3 className="text-lead">Revision {revision.number}</h3>
+        <h2 className="text-lead">Revision {revision.number}</h2>
         <StateBadge state={revision.state} />
         {revision.formula !== null && <FormulaText formula={revision.formula} />}
         <span className="ml-auto">
@@ -91,7 +91,7 @@ function Entry({
         <RelativeTime at={revision.createdAt} />
       </p>
       <Decision revision={revision} />
-      <div className="flex flex-wrap gap-2">
+      <div className="flex flex-wrap items-center gap-2">
         {isShown ? (
           <span className="text-small text-soft">shown now</span>
         ) : (
