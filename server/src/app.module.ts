@@ -8,7 +8,6 @@ import { ConfigModule } from '#server/config/config.module';
 import { DatabaseModule } from '#server/database/database.module';
 import { HealthModule } from '#server/health/health.module';
 import { HttpModule } from '#server/http/http.module';
-import { StaticClientModule } from '#server/http/static-client.module';
 import { InstallationModule } from '#server/installation/installation.module';
 import { PrototypesModule } from '#server/prototypes/prototypes.module';
 import { SymmetryModule } from '#server/symmetry/symmetry.module';
@@ -30,7 +29,6 @@ import { WorkspacesModule } from '#server/workspaces/workspaces.module';
     SymmetryModule,
     CifModule,
     PrototypesModule,
-    StaticClientModule,
   ],
 })
 export class AppModule {}

@@ -32,7 +32,28 @@ async function serve(): Promise<void> {
   console.log(`Holdfast is ready at http://${config.host}:${config.port}`);
 }
 
+/** Why the server could not start, in words its keeper can act on. */
+function describeFailure(error: unknown): unknown {
+  if (error instanceof ConfigurationError) {
+    return error.message;
+  }
+  const { code, address, port } = (error ?? {}) as NodeJS.ErrnoException & {
+    address?: string;
+    port?: number;
+  };
+  switch (code) {
+    case 'EADDRINUSE':
+      return `Port ${port} of ${address} is taken. Set PORT to another one.`;
+    case 'EACCES':
+      return `Port ${port} may not be opened by this user. Set PORT to one above 1024.`;
+    case 'ECONNREFUSED':
+      return `The database does not answer at ${address}:${port}. See HOLDFAST_DATABASE_URL.`;
+    default:
+      return error;
+  }
+}
+
 serve().catch((error: unknown) => {
-  console.error(error instanceof ConfigurationError ? error.message : error);
+  console.error(describeFailure(error));
   process.exit(1);
 });

@@ -49,7 +49,7 @@ describe('the health of the server', () => {
       });
       expect(JSON.stringify(response.body)).not.toContain('10.0.0.7');
     } finally {
-      pool.query = query as typeof pool.query;
+      pool.query = query;
     }
   });
 });

@@ -1,14 +1,18 @@
+import path from 'node:path';
+
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import type { Logger } from 'pino';
 
 import { APP_CONFIG, type AppConfig } from '#server/config/environment';
 import { productVersion } from '#server/config/product-version';
+import { projectRoot } from '#server/config/project-root';
 
 import { requestLogging } from './logging.js';
 import { serveApiReference } from './open-api.js';
 import { originCheck } from './origin-check.js';
 import { securityHeaders } from './security-headers.js';
 import { SESSION_MIDDLEWARE, type SessionMiddleware } from './session-middleware.js';
+import { serveClient } from './static-client.js';
 
 /** Largest body taken; the largest structure file with room to spare. */
 const bodyLimit = '4mb';
@@ -31,6 +35,7 @@ export function configureApp(app: NestExpressApplication, logger: Logger): void 
   app.setGlobalPrefix('api');
   app.use(requestLogging(logger));
   app.use(securityHeaders(isHttps));
+  serveClient(app, path.join(projectRoot(), 'dist', 'client'));
   app.use('/api', keepPrivate);
   app.use('/api', originCheck(config.publicOrigins));
   app.useBodyParser('json', { limit: bodyLimit });
