@@ -176,7 +176,7 @@ export function LatticeScreen(props: LatticeScreenProps): JSX.Element {
         className="mt-3.5"
       />
       <div className="wide:grid wide:grid-cols-[minmax(0,1fr)_minmax(32.5rem,41%)]">
-        <div className="h-[min(72dvh,34rem)] border-b border-line md:h-[min(66dvh,44rem)] wide:sticky wide:top-0 wide:h-[max(30rem,calc(100dvh-11.75rem))] wide:border-r wide:border-b-0">
+        <div className="h-[min(72dvh,34rem)] border-b border-line md:h-[min(66dvh,44rem)] wide:sticky wide:top-14 wide:h-[max(30rem,calc(100dvh-11.75rem))] wide:border-r wide:border-b-0">
           <StageColumn {...props} />
         </div>
         <div className="min-w-0 pt-5 wide:pl-7">

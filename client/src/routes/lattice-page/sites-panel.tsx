@@ -69,7 +69,7 @@ export function SitesPanel(props: SitesPanelProps): JSX.Element {
     props.onPick(id === null || isPicked ? [] : [id]);
   };
   return (
-    <div className="grid gap-7">
+    <div className="grid grid-cols-1 gap-7">
       <SiteResults
         result={result}
         pickedLabels={new Set(picked.map((one) => one.site.label))}

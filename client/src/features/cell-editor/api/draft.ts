@@ -1,4 +1,5 @@
 import { queryOptions } from '@tanstack/react-query';
+import { z } from 'zod';
 
 import { draft, type Draft, type PutDraftRequest } from '#common/schemas/lattice';
 import { api } from '#client/lib/api-client.ts';
@@ -20,5 +21,7 @@ export const readDraft = (ref: LatticeRef): Promise<Draft> =>
   api.get(`${latticePath(ref)}/draft`, { schema: draft });
 
 /** Throws the edit away: what is left is the newest revision. */
-export const discardDraft = (ref: LatticeRef, etag: string): Promise<Draft> =>
-  api.delete(`${latticePath(ref)}/draft`, { schema: draft, ifMatch: etag });
+export async function discardDraft(ref: LatticeRef, etag: string): Promise<Draft> {
+  await api.delete(`${latticePath(ref)}/draft`, { schema: z.unknown(), ifMatch: etag });
+  return readDraft(ref);
+}

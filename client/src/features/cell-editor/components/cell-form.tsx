@@ -74,7 +74,7 @@ export function CellForm(props: CellFormProps): JSX.Element {
           ?.operations.map(formatOperation) ?? ['x, y, z']);
   };
   return (
-    <div className="grid gap-6">
+    <div className="grid grid-cols-1 gap-6">
       <LiveNumbers cell={resolved.shown} isStale={resolved.cell === null} energy={props.energy} />
       <OtherProblems problems={problemsOutside(problems, (field) => formFields.test(field))} />
       <SymmetryFields

@@ -88,7 +88,7 @@ export function CellSection(props: CellSectionProps): JSX.Element {
     store.redo();
   });
   return (
-    <div className="grid gap-4">
+    <div className="grid grid-cols-1 gap-4">
       <div className="flex min-h-8 flex-wrap items-center justify-between gap-2">
         <DraftBar
           status={status}

@@ -45,7 +45,7 @@ export function SiteTableEditor(props: SiteTableEditorProps): JSX.Element {
         Sites
       </h2>
       {!isReadOnly && <ElementList id={listId} />}
-      <div className="-mx-1.5 overflow-x-auto px-1.5 pb-1">
+      <div className="relative -mx-1.5 overflow-x-auto px-1.5 pb-1">
         <table className="w-full border-collapse">
           <thead>
             <tr className="text-small text-soft">

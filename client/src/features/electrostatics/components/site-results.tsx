@@ -90,7 +90,7 @@ export function SiteResults({ result, pickedLabels, onPick }: SiteResultsProps):
       role="region"
       aria-label="Sites and what they feel"
       tabIndex={0}
-      className="overflow-x-auto"
+      className="relative overflow-x-auto"
     >
       <table className="w-full border-collapse whitespace-nowrap">
         <thead>

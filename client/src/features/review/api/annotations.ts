@@ -1,6 +1,8 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import { z } from 'zod';
 
 import { annotation, annotationList, type CreateAnnotationRequest } from '#common/schemas/review';
+import { id } from '#common/schemas/shared';
 import { api } from '#client/lib/api-client.ts';
 import { latticeKey, latticePath, type LatticeRef } from '#client/lib/lattice-keys.ts';
 import { latticesKey } from '#client/lib/query-keys.ts';
@@ -19,6 +21,9 @@ export const annotationsQuery = (ref: LatticeRef, revision: number) =>
     // A conversation: look again now and then while the page is open.
     refetchInterval: 30_000,
   });
+
+/** Enough to know that it worked: the list is asked again anyway. */
+const settled = z.object({ id });
 
 function useRefresh(ref: LatticeRef): () => Promise<void> {
   const client = useQueryClient();
@@ -44,7 +49,7 @@ export function useReply(ref: LatticeRef, annotationId: string) {
   return useMutation({
     mutationFn: (text: string) =>
       api.post(`${latticePath(ref)}/annotations/${annotationId}/replies`, {
-        schema: annotation,
+        schema: settled,
         body: { text },
       }),
     onSuccess: refresh,
@@ -56,7 +61,7 @@ export function useSettle(ref: LatticeRef, annotationId: string) {
   const refresh = useRefresh(ref);
   return useMutation({
     mutationFn: (verb: 'resolve' | 'reopen') =>
-      api.post(`${latticePath(ref)}/annotations/${annotationId}/${verb}`, { schema: annotation }),
+      api.post(`${latticePath(ref)}/annotations/${annotationId}/${verb}`, { schema: settled }),
     onSuccess: refresh,
   });
 }

@@ -1,6 +1,6 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 
-import { revisionDetail } from '#common/schemas/lattice';
+import { revisionSummary } from '#common/schemas/lattice';
 import { api } from '#client/lib/api-client.ts';
 import { latticePath, type LatticeRef } from '#client/lib/lattice-keys.ts';
 import { latticesKey } from '#client/lib/query-keys.ts';
@@ -17,7 +17,7 @@ export function useDecide(ref: LatticeRef, revision: number) {
   return useMutation({
     mutationFn: (decision: Decision) =>
       api.post(`${latticePath(ref)}/revisions/${revision}/${decision.verb}`, {
-        schema: revisionDetail,
+        schema: revisionSummary,
         ...('reason' in decision ? { body: { reason: decision.reason } } : {}),
       }),
     // Also after a failure: someone else may have decided meanwhile.
