@@ -27,7 +27,7 @@ export function ShellTable({ rows, litRow, onLight }: ShellTableProps): JSX.Elem
     return <p className="py-3 text-soft">No neighbour lies within the reach.</p>;
   }
   return (
-    <table className="w-full border-collapse">
+    <table className="w-full border-collapse whitespace-nowrap">
       <thead>
         <tr className="border-b border-line text-left">
           <th scope="col" className={`${head} pl-2.5`}>
@@ -47,7 +47,7 @@ export function ShellTable({ rows, litRow, onLight }: ShellTableProps): JSX.Elem
           <th scope="col" className={`${head} text-right`}>
             eV
           </th>
-          <th scope="col" className={`${head} text-right`}>
+          <th scope="col" className={`${head} text-right max-sm:hidden`}>
             sum, eV
           </th>
         </tr>
@@ -69,8 +69,8 @@ export function ShellTable({ rows, litRow, onLight }: ShellTableProps): JSX.Elem
                 <IonText speciesKey={row.speciesKey} />
               </button>
             </td>
-            <td className="text-small text-soft">{formatFixed(row.distanceA, 3)}</td>
-            <td className="text-small text-soft">{row.multiplicity}</td>
+            <td className="pr-2 text-small text-soft">{formatFixed(row.distanceA, 3)}</td>
+            <td className="pr-2 text-small text-soft">{row.multiplicity}</td>
             <td className="relative h-[31px] px-2">
               <span className="block h-full">
                 <SenseBar bar={bars[index]!} isThin />
@@ -85,7 +85,7 @@ export function ShellTable({ rows, litRow, onLight }: ShellTableProps): JSX.Elem
               )}
             </td>
             <td className="text-right">{formatSigned(row.energyEv, decimals)}</td>
-            <td className="pl-3 text-right text-small text-soft">
+            <td className="pl-3 text-right text-small text-soft max-sm:hidden">
               {formatSigned(row.runningEv, decimals)}
             </td>
           </tr>
