@@ -131,6 +131,22 @@ describe('guessing from one address', () => {
   });
 });
 
+describe('over https', () => {
+  it('sets cookies that never travel without encryption', async () => {
+    const { email } = await makeUser(test.db);
+    const response = await attempt(test.browser(), email, testPassword, newAddress()).set(
+      'x-forwarded-proto',
+      'https',
+    );
+    const cookies = response.headers['set-cookie'] as unknown as string[];
+    expect(cookies).toHaveLength(2);
+    for (const cookie of cookies) {
+      expect(cookie).toMatch(/; Secure/);
+      expect(cookie).toMatch(/; HttpOnly/);
+    }
+  });
+});
+
 describe('what is kept', () => {
   it('survives in the database by hash, and is forgotten after a day', async () => {
     const { email } = await makeUser(test.db);

@@ -156,3 +156,19 @@ describe('the reference of the API', () => {
     expect(headers['content-security-policy']).toContain("script-src 'self';");
   });
 });
+
+// Last in the file: it uses up this address's share of the minute.
+describe('a flood of requests from one address', () => {
+  it('is refused for a while, and says for how long; other routes go on', async () => {
+    const statuses = new Set<number>();
+    let refused = await test.browser().post('/api/setup').send({});
+    for (let index = 0; index < 130 && refused.status !== 429; index += 1) {
+      statuses.add(refused.status);
+      refused = await test.browser().post('/api/setup').send({});
+    }
+    expect([...statuses]).toEqual([400]);
+    expect([refused.status, failure(refused).code]).toEqual([429, 'request.too_many']);
+    expect(Number(refused.headers['retry-after'])).toBeGreaterThan(0);
+    await test.browser().get('/api/session').expect(200);
+  });
+});
