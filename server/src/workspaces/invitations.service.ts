@@ -17,7 +17,7 @@ import { InvitationsRepository, type PendingInvitation } from './invitations.rep
 import { MembersRepository } from './members.repository.js';
 
 /** How long an invitation can be accepted, in milliseconds. */
-export const invitationMs = 7 * 24 * 3_600_000;
+const invitationMs = 7 * 24 * 3_600_000;
 
 @Injectable()
 export class InvitationsService {

@@ -29,4 +29,3 @@ export const memberships = pgTable(
     index('memberships_user').on(table.userId),
   ],
 );
-export type MembershipRow = typeof memberships.$inferSelect;
