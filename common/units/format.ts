@@ -4,7 +4,7 @@
  */
 
 /** U+2212, as wide as the plus. */
-export const MINUS = '−';
+const MINUS = '−';
 /** U+2009 thin space, between groups of three digits. */
 export const THIN_SPACE = '\u2009';
 
@@ -31,7 +31,7 @@ export function superscript(text: string): string {
 }
 
 /** Groups of three on both sides of the point; up to four digits stay together. */
-export function groupDigits(text: string): string {
+function groupDigits(text: string): string {
   const [whole = '', fraction] = text.split('.');
   const digits = whole.replace(/^[-−+]/, '');
   const grouped =

@@ -33,10 +33,3 @@ export function speciesText(key: string): string {
     })
     .join(', ');
 }
-
-/** Element or elements of a species, without charge: `Mg`, `Mg/Fe`. */
-export function speciesElements(key: string): string {
-  return parseSpeciesKey(key)
-    .map(({ element }) => element)
-    .join('/');
-}

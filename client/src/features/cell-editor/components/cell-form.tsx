@@ -20,7 +20,7 @@ import {
 } from '#client/features/cell-editor/model/field-problems.ts';
 
 /** One change to the content; `field` merges the letters of a word into one step of undo. */
-export type Edit = (change: Partial<EditorContent>, field: string | null) => void;
+type Edit = (change: Partial<EditorContent>, field: string | null) => void;
 
 interface CellFormProps {
   content: EditorContent;

@@ -34,7 +34,7 @@ export function setOperations(cell: CellDefinition, operations: string[]): CellD
 }
 
 /** The next free label of an element: `O2` after `O1`. */
-export function freeLabel(sites: readonly CellSite[], element: string): string {
+function freeLabel(sites: readonly CellSite[], element: string): string {
   const taken = new Set(sites.map((site) => site.label));
   const stem = element === '' ? 'X' : element;
   let number = 1;

@@ -4,7 +4,7 @@ import type { LedgerBar } from '#client/features/electrostatics/model/ledger-lay
 import { classNames } from '#client/lib/class-names.ts';
 
 /** Share of the column's half that the longest bar takes; the rest is air. */
-export const barReach = 0.96;
+const barReach = 0.96;
 
 const percent = (at: number): string => `${(50 + 50 * barReach * at).toFixed(3)}%`;
 

@@ -15,7 +15,12 @@ export function SublatticeTable({ result }: { result: EvaluationResult }): JSX.E
         out negative and the cross term may be positive. Only sums over neutral combinations are
         physical; the sum over all of them is the energy of the formula unit.
       </p>
-      <div role="region" aria-label="Sublattice matrix" tabIndex={0} className="relative overflow-x-auto">
+      <div
+        role="region"
+        aria-label="Sublattice matrix"
+        tabIndex={0}
+        className="relative overflow-x-auto"
+      >
         <table className="border-collapse whitespace-nowrap">
           <thead>
             <tr className="border-b border-line text-small">

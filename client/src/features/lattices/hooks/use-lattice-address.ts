@@ -4,7 +4,7 @@ import { useSearchParams } from 'react-router-dom';
 import type { PairLedger } from '#common/schemas/evaluation';
 import { formatSceneView, parseSceneView, type SceneView } from '#client/scene/model/scene-view.ts';
 
-export const sectionKeys = ['energy', 'cell', 'sites', 'remarks', 'history'] as const;
+const sectionKeys = ['energy', 'cell', 'sites', 'remarks', 'history'] as const;
 export type SectionKey = (typeof sectionKeys)[number];
 
 /** What one looks at and how: lives in the address, so that a reload or a sent link shows the same. */
