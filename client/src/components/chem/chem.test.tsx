@@ -62,7 +62,7 @@ describe('CertainNumber', () => {
         />
       </ToastProvider>,
     );
-    const number = screen.getByRole('button', { name: /−47\.795\s461\s7 eV/ });
+    const number = screen.getByRole('button', { name: /−47\.795\s?461\s?7 eV/ });
     await user.hover(number);
     expect(screen.getByRole('tooltip')).toHaveTextContent('certain to ± 8 × 10⁻⁹ eV');
     await user.click(number);

@@ -102,7 +102,7 @@ describe('EnergyFigures', () => {
       </ToastProvider>,
     );
     expect(
-      screen.getByRole('button', { name: /^−7\.113\s106\s12 eV per formula unit$/ }),
+      screen.getByRole('button', { name: /^−7\.113\s?106\s?12 eV per formula unit$/ }),
     ).toBeInTheDocument();
     expect(screen.getByText('More than two kinds of ion.')).toBeInTheDocument();
     expect(screen.getByText(/certain to ± 2 × 10⁻⁹ eV · conducting boundary/)).toBeInTheDocument();
