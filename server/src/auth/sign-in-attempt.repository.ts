@@ -4,7 +4,12 @@ import { Inject, Injectable } from '@nestjs/common';
 import { asc, eq, inArray, lt, sql } from 'drizzle-orm';
 
 import { Clock } from '#server/config/clock';
-import { DATABASE, withTransaction, type Database } from '#server/database/database';
+import {
+  DATABASE,
+  withTransaction,
+  type Database,
+  type Transaction,
+} from '#server/database/database';
 
 import { delayAfterMs, forgetAfterMs, type AttemptKind } from './sign-in-delay.js';
 import { signInAttempts } from './sign-in-attempt.table.js';
@@ -42,13 +47,7 @@ export class SignInAttemptRepository {
         .insert(signInAttempts)
         .values(names.map((key) => ({ key, failures: 0, lastAt: start, blockedUntil: start })))
         .onConflictDoNothing();
-      // In one order, so that two tries never wait for each other.
-      const rows = await tx
-        .select()
-        .from(signInAttempts)
-        .where(inArray(signInAttempts.key, names))
-        .orderBy(asc(signInAttempts.key))
-        .for('update');
+      const rows = await this.hold(names, tx);
       // Read once the rows are held: a try that came first may have waited less.
       const now = this.clock.now();
       const waitMs = Math.max(...rows.map((row) => row.blockedUntil.getTime() - now.getTime()));
@@ -74,23 +73,28 @@ export class SignInAttemptRepository {
    * only loses this one, or an attacker's own account would wash it clean.
    */
   async succeed(keys: readonly AttemptKey[]): Promise<void> {
-    const names = sortedKeys(keys);
-    const own = names.filter(({ kind }) => kind !== 'address').map(({ key }) => key);
-    const addresses = names.filter(({ kind }) => kind === 'address').map(({ key }) => key);
+    const names = sortedKeys(keys).map(({ key }) => key);
     await withTransaction(this.db, async (tx) => {
-      if (addresses.length > 0) {
-        await tx
-          .update(signInAttempts)
-          .set({
-            failures: sql`greatest(${signInAttempts.failures} - 1, 0)`,
-            blockedUntil: this.clock.now(),
-          })
-          .where(inArray(signInAttempts.key, addresses));
-      }
-      if (own.length > 0) {
-        await tx.delete(signInAttempts).where(inArray(signInAttempts.key, own));
-      }
+      await this.hold(names, tx);
+      await tx
+        .update(signInAttempts)
+        .set({
+          failures: sql`case when ${signInAttempts.key} like 'address:%'
+            then greatest(${signInAttempts.failures} - 1, 0) else 0 end`,
+          blockedUntil: this.clock.now(),
+        })
+        .where(inArray(signInAttempts.key, names));
     });
+  }
+
+  /** Locks the counters until the transaction ends; in one order, so that no two wait in a ring. */
+  private hold(names: readonly string[], tx: Transaction) {
+    return tx
+      .select()
+      .from(signInAttempts)
+      .where(inArray(signInAttempts.key, names))
+      .orderBy(asc(signInAttempts.key))
+      .for('update');
   }
 
   /** Forgets what is too old to count. */
