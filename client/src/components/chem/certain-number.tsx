@@ -41,10 +41,13 @@ function Note({
   id,
   lines,
   align,
+  isCopied = true,
 }: {
   id: string;
   lines: readonly string[];
   align: 'start' | 'end';
+  /** Whether a click copies what the note is about. */
+  isCopied?: boolean;
 }): JSX.Element {
   return (
     <span
@@ -61,9 +64,11 @@ function Note({
           {line}
         </span>
       ))}
-      <span className="mt-1 flex items-center gap-1.5 text-soft">
-        <Copy aria-hidden className="size-3.5" /> Click copies it with its unit.
-      </span>
+      {isCopied && (
+        <span className="mt-1 flex items-center gap-1.5 text-soft">
+          <Copy aria-hidden className="size-3.5" /> Click copies it with its unit.
+        </span>
+      )}
     </span>
   );
 }
@@ -140,6 +145,37 @@ export function CertainText({
       title={`certain to ± ${formatBound(bound)}${unit === '' ? '' : ` ${unit}`}`}
     >
       <Digits text={text} />
+    </span>
+  );
+}
+
+/** In place of a number that means nothing here; hover or focus says why. */
+export function NoNumber({
+  reason,
+  align = 'start',
+}: {
+  reason: string;
+  align?: 'start' | 'end';
+}): JSX.Element {
+  const noteId = useId();
+  const [isOpen, setOpen] = useState(false);
+  return (
+    <span
+      className="relative inline-block"
+      onPointerEnter={() => setOpen(true)}
+      onPointerLeave={() => setOpen(false)}
+    >
+      <button
+        type="button"
+        aria-label={`not defined: ${reason}`}
+        onFocus={() => setOpen(true)}
+        onBlur={() => setOpen(false)}
+        onClick={() => setOpen(true)}
+        className="cursor-help rounded-control text-body font-normal text-soft underline decoration-faint decoration-dotted underline-offset-4"
+      >
+        not defined
+      </button>
+      {isOpen && <Note id={noteId} lines={[reason]} align={align} isCopied={false} />}
     </span>
   );
 }

@@ -3,7 +3,7 @@ import type { JSX } from 'react';
 
 import type { BoundedOrReason, EvaluationResult } from '#common/schemas/evaluation';
 import { formatBound } from '#common/units/format';
-import { CertainNumber } from '#client/components/chem/certain-number.tsx';
+import { CertainNumber, NoNumber } from '#client/components/chem/certain-number.tsx';
 import { energyBoundEv } from '#client/features/electrostatics/model/bounds.ts';
 import {
   conventions,
@@ -78,7 +78,7 @@ function Constant({
     <div className="min-w-0">
       <dd className="text-lead font-medium">
         {constant.value === null || constant.bound === null ? (
-          <span className="text-small font-normal text-soft">{constant.reason}</span>
+          <NoNumber reason={constant.reason ?? 'It means nothing for this cell.'} align={align} />
         ) : (
           <CertainNumber
             value={constant.value}

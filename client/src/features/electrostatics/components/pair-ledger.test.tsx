@@ -104,7 +104,9 @@ describe('EnergyFigures', () => {
     expect(
       screen.getByRole('button', { name: /^−7\.113\s?106\s?12 eV per formula unit$/ }),
     ).toBeInTheDocument();
-    expect(screen.getByText('More than two kinds of ion.')).toBeInTheDocument();
+    expect(
+      screen.getByRole('button', { name: 'not defined: More than two kinds of ion.' }),
+    ).toBeInTheDocument();
     expect(screen.getByText(/certain to ± 2 × 10⁻⁹ eV · conducting boundary/)).toBeInTheDocument();
   });
 
