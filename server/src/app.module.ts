@@ -6,6 +6,7 @@ import { AuthModule } from '#server/auth/auth.module';
 import { CifModule } from '#server/cif/cif.module';
 import { ConfigModule } from '#server/config/config.module';
 import { DatabaseModule } from '#server/database/database.module';
+import { ElectrostaticsModule } from '#server/electrostatics/electrostatics.module';
 import { HealthModule } from '#server/health/health.module';
 import { HttpModule } from '#server/http/http.module';
 import { InstallationModule } from '#server/installation/installation.module';
@@ -29,6 +30,7 @@ import { WorkspacesModule } from '#server/workspaces/workspaces.module';
     SymmetryModule,
     CifModule,
     PrototypesModule,
+    ElectrostaticsModule,
   ],
 })
 export class AppModule {}

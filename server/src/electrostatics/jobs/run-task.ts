@@ -1,0 +1,69 @@
+import { createHash } from 'node:crypto';
+import { performance } from 'node:perf_hooks';
+
+import { Problem, type FieldProblem } from '#common/errors/problem';
+import { evaluationHashInput } from '#common/physics/cell-hash-input';
+import { composition } from '#common/physics/composition';
+import { resolveCell, type CellSymmetryData } from '#common/physics/resolve-cell';
+import type { ResolvedCell } from '#common/physics/resolved-cell';
+import type { EvaluationMethod } from '#common/schemas/cell';
+import { symmetryOf } from '#server/symmetry/space-groups';
+
+import { engineVersion } from '../engine/index.js';
+import { evaluateCell } from '../evaluate-cell.js';
+import type { CellIdentity, EvaluationTask, TaskAnswer } from './evaluation-task.js';
+
+const fieldsReported = 50;
+
+/** Field paths of the cell become those of the request: `sites.0.x` → `cell.sites.0.x`. */
+function refusal(code: string, message: string, fields: readonly FieldProblem[]): TaskAnswer {
+  const inRequest = fields
+    .slice(0, fieldsReported)
+    .map((field) => ({ ...field, field: `cell.${field.field}` }));
+  return { kind: 'problem', problem: { code, message, fields: inRequest } };
+}
+
+function identify(
+  cell: ResolvedCell,
+  method: EvaluationMethod,
+  { setting }: CellSymmetryData,
+): CellIdentity {
+  const named = setting && { number: setting.number, symbol: setting.symbol };
+  return {
+    hash: createHash('sha256')
+      .update(evaluationHashInput(cell, method, named, engineVersion))
+      .digest('hex'),
+    formula: composition(cell).formula,
+    spaceGroupNumber: setting?.number ?? null,
+    spaceGroupSymbol: setting?.symbol ?? null,
+  };
+}
+
+function perform({ kind, cell: definition, method }: EvaluationTask): TaskAnswer {
+  const started = performance.now();
+  const symmetry = symmetryOf(definition.symmetry);
+  const { cell, problems } = resolveCell(definition, symmetry);
+  if (cell === null) {
+    const [first] = problems;
+    return refusal(first!.code, first!.message, problems);
+  }
+  const identity = identify(cell, method, symmetry);
+  if (kind === 'identify') {
+    return { kind: 'identity', identity };
+  }
+  const { hash, spaceGroupNumber, spaceGroupSymbol } = identity;
+  const result = evaluateCell(cell, method, { spaceGroupNumber, spaceGroupSymbol });
+  return { kind: 'evaluation', hash, result, durationMs: performance.now() - started };
+}
+
+/** Does a task from start to end; what is wrong with the cell is an answer, not a failure. */
+export function runTask(task: EvaluationTask): TaskAnswer {
+  try {
+    return perform(task);
+  } catch (error) {
+    if (error instanceof Problem) {
+      return refusal(error.code, error.message, error.details?.fields ?? []);
+    }
+    throw error;
+  }
+}
