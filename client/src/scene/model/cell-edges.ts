@@ -8,6 +8,8 @@ export interface CellEdge {
   readonly axis: 0 | 1 | 2;
   /** Edges of the first cell stand out; the others of a repeated block are fainter. */
   readonly isFirstCell: boolean;
+  /** On one of the twelve edges of the whole block. */
+  readonly isOutline: boolean;
 }
 
 const axes = [0, 1, 2] as const;
@@ -30,6 +32,7 @@ function edgesAlong(block: Block, axis: 0 | 1 | 2): CellEdge[] {
           to: placeAt(block.vectorsA, ...to),
           axis,
           isFirstCell: step === 0 && p <= 1 && q <= 1,
+          isOutline: p % block.repeat[u] === 0 && q % block.repeat[v] === 0,
         });
       }
     }

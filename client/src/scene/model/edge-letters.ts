@@ -51,7 +51,7 @@ interface Candidate {
 
 function candidates(edges: readonly CellEdge[], axis: 0 | 1 | 2): Candidate[] {
   return edges
-    .filter((edge) => edge.axis === axis && edge.isFirstCell)
+    .filter((edge) => edge.axis === axis && edge.isOutline)
     .flatMap(({ from, to }) =>
       fractions.map((share) => ({
         at: addScaled(from, subtract(to, from), share),
@@ -63,7 +63,7 @@ function candidates(edges: readonly CellEdge[], axis: 0 | 1 | 2): Candidate[] {
 /** An axis that points at the viewer shows no edge to write on; the compass still names it. */
 function isEndOn(edges: readonly CellEdge[], axis: 0 | 1 | 2, projection: Projection): boolean {
   const longest = edges
-    .filter((edge) => edge.axis === axis && edge.isFirstCell)
+    .filter((edge) => edge.axis === axis && edge.isOutline)
     .map(({ from, to }) => {
       const [start, end] = [projection.toStage(from), projection.toStage(to)];
       return Math.hypot(end.x - start.x, end.y - start.y);
@@ -72,7 +72,7 @@ function isEndOn(edges: readonly CellEdge[], axis: 0 | 1 | 2, projection: Projec
 }
 
 /**
- * A place on an edge of the first cell for each of a, b, c, clear of every ion on the stage where
+ * A place on an edge of the block for each of a, b, c, clear of every ion on the stage where
  * there is one; otherwise the clearest there is. Lower and nearer edges are preferred.
  */
 export function placeEdgeLetters(

@@ -12,7 +12,7 @@ interface EdgeLettersLayerProps {
 
 const letters = ['a', 'b', 'c'] as const;
 
-/** The letters a, b, c on edges of the first cell, clear of ions. */
+/** The letters a, b, c on edges of the block, clear of ions. */
 export function EdgeLettersLayer({ frames, model, ionScale }: EdgeLettersLayerProps): JSX.Element {
   const layer = useRef<HTMLDivElement>(null);
   useOnFrame(frames, (projection) => {
