@@ -10,7 +10,10 @@ import { ElectrostaticsModule } from '#server/electrostatics/electrostatics.modu
 import { HealthModule } from '#server/health/health.module';
 import { HttpModule } from '#server/http/http.module';
 import { InstallationModule } from '#server/installation/installation.module';
+import { LatticesModule } from '#server/lattices/lattices.module';
 import { PrototypesModule } from '#server/prototypes/prototypes.module';
+import { ReviewModule } from '#server/review/review.module';
+import { SharingModule } from '#server/sharing/sharing.module';
 import { SymmetryModule } from '#server/symmetry/symmetry.module';
 import { UsersModule } from '#server/users/users.module';
 import { WorkspacesModule } from '#server/workspaces/workspaces.module';
@@ -31,6 +34,9 @@ import { WorkspacesModule } from '#server/workspaces/workspaces.module';
     CifModule,
     PrototypesModule,
     ElectrostaticsModule,
+    LatticesModule,
+    ReviewModule,
+    SharingModule,
   ],
 })
 export class AppModule {}

@@ -1,7 +1,8 @@
 import { Inject, Injectable } from '@nestjs/common';
-import { and, eq } from 'drizzle-orm';
+import { and, eq, lt, notExists } from 'drizzle-orm';
 
-import { DATABASE, type Database, type Executor } from '#server/database/database';
+import { DATABASE, type Database } from '#server/database/database';
+import { revisions } from '#server/lattices/revisions/revision.table';
 
 import { evaluations, evaluationUses, type EvaluationRow } from './evaluation.table.js';
 
@@ -32,7 +33,20 @@ export class EvaluationsRepository {
   }
 
   /** Notes that a workspace has asked for a result. */
-  async noteUse(workspaceId: string, hash: string, executor: Executor = this.db): Promise<void> {
-    await executor.insert(evaluationUses).values({ workspaceId, hash }).onConflictDoNothing();
+  async noteUse(workspaceId: string, hash: string): Promise<void> {
+    await this.db.insert(evaluationUses).values({ workspaceId, hash }).onConflictDoNothing();
+  }
+
+  /** Removes results computed before a moment that no revision names; returns how many. */
+  async removeUnnamed(computedBefore: Date): Promise<number> {
+    const naming = this.db
+      .select({ id: revisions.id })
+      .from(revisions)
+      .where(eq(revisions.evaluationHash, evaluations.hash));
+    const rows = await this.db
+      .delete(evaluations)
+      .where(and(lt(evaluations.computedAt, computedBefore), notExists(naming)))
+      .returning({ hash: evaluations.hash });
+    return rows.length;
   }
 }

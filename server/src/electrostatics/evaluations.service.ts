@@ -84,6 +84,11 @@ export class EvaluationsService {
     return this.repository.find(hash);
   }
 
+  /** Drops old results that no revision names; asked for again, they are computed again. */
+  forgetUnnamed(computedBefore: Date): Promise<number> {
+    return this.repository.removeUnnamed(computedBefore);
+  }
+
   /**
    * What a cell is and its evaluation, or why it has none. For other services, which have checked
    * access already.
@@ -112,6 +117,12 @@ export class EvaluationsService {
       await this.repository.noteUse(workspaceId, identity.hash);
     }
     return { ...computed, identity };
+  }
+
+  /** Whether the pair ledger of a cell has a row of this name, at whatever reach. */
+  async hasPair(cell: CellDefinition, method: EvaluationMethod, pairKey: string): Promise<boolean> {
+    const answer = await this.pool.run({ kind: 'find_pair', cell, method, pairKey });
+    return answer.kind === 'pair' && answer.isThere;
   }
 
   /** Waits for the computation of this hash, starting it if it isn't under way. */
@@ -168,7 +179,7 @@ export class EvaluationsService {
         const row = { hash, engine: result.engine, method: result.method, result, durationMs };
         return { evaluation: await this.repository.keep(row), problem: null };
       }
-      case 'identity':
+      default:
         throw new Error('A worker answered another question.');
     }
   }

@@ -1,17 +1,22 @@
 import type { EvaluationProblem, EvaluationResult } from '#common/schemas/evaluation';
 import type { CellDefinition, EvaluationMethod } from '#common/schemas/cell';
 
-/** What a worker thread is asked: what a cell is and its address, or its evaluation. */
-export interface EvaluationTask {
-  readonly kind: 'identify' | 'evaluate';
+/** What a worker thread is asked about a cell. */
+export type EvaluationTask = {
   readonly cell: CellDefinition;
   readonly method: EvaluationMethod;
-}
+} & (
+  | { /** What it is, and the address of its evaluation. */ readonly kind: 'identify' }
+  | { readonly kind: 'evaluate' }
+  | {
+      /** Whether its pair ledger has this row, at whatever reach. */
+      readonly kind: 'find_pair';
+      readonly pairKey: string;
+    }
+);
 
 /** A task on its way to a thread, which sets the first element to 1 when it begins. */
-export interface QueuedTask extends EvaluationTask {
-  readonly begun: Int32Array;
-}
+export type QueuedTask = EvaluationTask & { readonly begun: Int32Array };
 
 /** What a cell is, whether or not it can be evaluated. */
 export interface CellIdentity {
@@ -30,4 +35,5 @@ export type TaskAnswer =
       readonly result: EvaluationResult;
       readonly durationMs: number;
     }
+  | { readonly kind: 'pair'; readonly isThere: boolean }
   | { readonly kind: 'problem'; readonly problem: EvaluationProblem };

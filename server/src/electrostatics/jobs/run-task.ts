@@ -4,6 +4,7 @@ import { performance } from 'node:perf_hooks';
 import { Problem, type FieldProblem } from '#common/errors/problem';
 import { evaluationHashInput } from '#common/physics/cell-hash-input';
 import { composition } from '#common/physics/composition';
+import { buildPairLedger, defaultGroupingA } from '#common/physics/pair-ledger';
 import { resolveCell, type CellSymmetryData } from '#common/physics/resolve-cell';
 import type { ResolvedCell } from '#common/physics/resolved-cell';
 import type { EvaluationMethod } from '#common/schemas/cell';
@@ -39,16 +40,34 @@ function identify(
   };
 }
 
-function perform({ kind, cell: definition, method }: EvaluationTask): TaskAnswer {
+/** Pairs counted at most to find one row: as far as a reach can be set on the page, and more. */
+const mostPairs = 4e6;
+
+/** Whether the pair ledger has a row of this name when it reaches that far. */
+function hasPair(cell: ResolvedCell, pairKey: string): boolean {
+  const distanceA = Number(pairKey.split('|').at(-1));
+  const pairs = (4 * Math.PI * distanceA ** 3 * cell.sites.length ** 2) / (3 * cell.volumeA3);
+  if (!(distanceA > 0 && pairs <= mostPairs)) {
+    return false;
+  }
+  const reachA = distanceA + 2 * defaultGroupingA;
+  return buildPairLedger(cell, 0, 1, { reachA }).rows.some(({ key }) => key === pairKey);
+}
+
+function perform(task: EvaluationTask): TaskAnswer {
   const started = performance.now();
+  const { cell: definition, method } = task;
   const symmetry = symmetryOf(definition.symmetry);
   const { cell, problems } = resolveCell(definition, symmetry);
   if (cell === null) {
     const [first] = problems;
     return refusal(first!.code, first!.message, problems);
   }
+  if (task.kind === 'find_pair') {
+    return { kind: 'pair', isThere: hasPair(cell, task.pairKey) };
+  }
   const identity = identify(cell, method, symmetry);
-  if (kind === 'identify') {
+  if (task.kind === 'identify') {
     return { kind: 'identity', identity };
   }
   const { hash, spaceGroupNumber, spaceGroupSymbol } = identity;
