@@ -82,6 +82,18 @@ describe('LatticeViewer', () => {
     vi.useRealTimers();
   });
 
+  it('reports to the newest handler, also when it changes while the view settles', () => {
+    vi.useFakeTimers();
+    const [early, late] = [vi.fn(), vi.fn()];
+    const { rerender } = render(<Bench onViewChange={early} />);
+    fireEvent.keyDown(stage(), { key: '-' });
+    rerender(<Bench onViewChange={late} />);
+    vi.advanceTimersByTime(1000);
+    expect(early).not.toHaveBeenCalled();
+    expect(late).toHaveBeenCalledTimes(1);
+    vi.useRealTimers();
+  });
+
   it('looks along an axis by key, shown in the row of directions', () => {
     render(<Bench />);
     expect(screen.getByRole('radio', { name: 'free' })).toBeChecked();

@@ -6,7 +6,7 @@ import { placeAt, type Vector } from './vector.ts';
 export type Repeat = readonly [number, number, number];
 
 /** Ions drawn at most when cells are repeated; a single cell is always drawn whole. */
-export const blockIonLimit = 12_000;
+const blockIonLimit = 12_000;
 export const repeatLimit = 8;
 
 /** The ions on show, as flat arrays in one order. */

@@ -11,7 +11,7 @@ export interface Bond {
 const radiusSumFactor = 1.25;
 /** … and within the first shell: no farther than this times the nearest unlike neighbour. */
 const firstShellFactor = 1.35;
-export const bondLimit = 40_000;
+const bondLimit = 40_000;
 
 /**
  * Struts to draw, a picture of contact and no statement on bonding: unlike signs only, within

@@ -13,7 +13,7 @@ export interface LitPair {
   readonly to: number;
 }
 
-export const litPairLimit = 400;
+const litPairLimit = 400;
 /** Distances of one row agree this well; rows differ by more. */
 const sameDistanceA = 2e-3;
 

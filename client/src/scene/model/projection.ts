@@ -2,7 +2,7 @@ import type { ViewPose } from './scene-view.ts';
 import { addScaled, dot, normalise, subtract, type Vector } from './vector.ts';
 
 /** A point of the stage: pixels from the upper left, and the distance in front of the eye in Å. */
-export interface StagePoint {
+interface StagePoint {
   readonly x: number;
   readonly y: number;
   readonly depthA: number;

@@ -23,7 +23,7 @@ export const defaultSceneView: SceneView = {
 
 export const zoomLimits = { least: 0.35, most: 14 } as const;
 /** Vertical opening of the eye, degrees. */
-export const openingDeg = 25;
+const openingDeg = 25;
 /** Share of the shorter side that the block's sphere may fill at zoom 1. */
 export const fill = 0.97;
 

@@ -85,31 +85,53 @@ const haloFarRadii = 5;
 
 /** Contact shading: darkens what stands close behind a ball, around its outline. */
 export function drawHalo(buffer: RasterBuffer, ball: ScreenBall): void {
-  const { x: cx, y: cy, radiusPx: r, depthA, radiusA } = ball;
-  const { pixels, depths, width, height } = buffer;
+  const { x: cx, y: cy, radiusPx: r } = ball;
+  const { width, height } = buffer;
   const outer = r * (1 + haloReach);
-  const far = radiusA * haloFarRadii;
+  const inner = r - 1;
   const firstRow = Math.max(0, Math.floor(cy - outer));
   const lastRow = Math.min(height - 1, Math.ceil(cy + outer));
   for (let y = firstRow; y <= lastRow; y += 1) {
     const dy = y + 0.5 - cy;
     const reach = Math.sqrt(Math.max(0, outer * outer - dy * dy));
-    const lastColumn = Math.min(width - 1, Math.ceil(cx + reach));
-    for (let x = Math.max(0, Math.floor(cx - reach)); x <= lastColumn; x += 1) {
-      const at = y * width + x;
-      const behind = depths[at]! - depthA;
-      if (behind <= 0 || behind >= far) {
-        continue;
-      }
-      const dx = x + 0.5 - cx;
-      const away = (Math.sqrt(dx * dx + dy * dy) - r) / (r * haloReach);
-      if (away < 1) {
-        const edge = 1 - (away < 0 ? 0 : away);
-        // What crosses the ball's middle plane is hardly behind it yet.
-        const apart = Math.min(1, behind / (0.8 * radiusA));
-        const strength = haloDepth * edge * edge * apart * (1 - behind / far);
-        pixels[at] = darken(pixels[at]!, (256 * (1 - strength)) | 0);
-      }
+    // The ball itself will cover the middle.
+    const skip = Math.sqrt(Math.max(0, inner * inner - dy * dy));
+    const first = Math.max(0, Math.floor(cx - reach));
+    const last = Math.min(width - 1, Math.ceil(cx + reach));
+    darkenSpan(buffer, ball, y, first, Math.min(last, Math.ceil(cx - skip)));
+    darkenSpan(
+      buffer,
+      ball,
+      y,
+      Math.max(first, Math.ceil(cx - skip) + 1, Math.floor(cx + skip) - 1),
+      last,
+    );
+  }
+}
+
+function darkenSpan(
+  { pixels, depths, width }: RasterBuffer,
+  { x: cx, y: cy, radiusPx: r, depthA, radiusA }: ScreenBall,
+  y: number,
+  first: number,
+  last: number,
+): void {
+  const far = radiusA * haloFarRadii;
+  const dy = y + 0.5 - cy;
+  for (let x = first; x <= last; x += 1) {
+    const at = y * width + x;
+    const behind = depths[at]! - depthA;
+    if (behind <= 0 || behind >= far) {
+      continue;
+    }
+    const dx = x + 0.5 - cx;
+    const away = (Math.sqrt(dx * dx + dy * dy) - r) / (r * haloReach);
+    if (away < 1) {
+      const edge = 1 - (away < 0 ? 0 : away);
+      // What crosses the ball's middle plane is hardly behind it yet.
+      const apart = Math.min(1, behind / (0.8 * radiusA));
+      const strength = haloDepth * edge * edge * apart * (1 - behind / far);
+      pixels[at] = darken(pixels[at]!, (256 * (1 - strength)) | 0);
     }
   }
 }

@@ -70,13 +70,13 @@ export function strutProfile(t: number): number {
 }
 
 /** The first end's colour gives way to the other's around the middle. */
-export function otherShare(t: number): number {
+function otherShare(t: number): number {
   const step = t < 0.34 ? 0 : t > 0.66 ? 1 : (t - 0.34) / 0.32;
   return step * step * (3 - 2 * step);
 }
 
 /** Struts are darker where they enter a ball. */
-export function contactShade(t: number): number {
+function contactShade(t: number): number {
   const fromEnd = t < 0.5 ? t : 1 - t;
   return fromEnd < 0.2 ? 0.8 + fromEnd : 1;
 }

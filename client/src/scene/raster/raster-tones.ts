@@ -7,7 +7,7 @@ const bodySteps = 128;
 const glossSteps = 64;
 const bodyRange = 1.25;
 const glossRange = 0.45;
-export const toneCount = bodySteps * glossSteps;
+const toneCount = bodySteps * glossSteps;
 
 function toneOf(nx: number, ny: number, nz: number): number {
   const { body, gloss } = shade(nx, ny, nz);

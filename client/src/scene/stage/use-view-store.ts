@@ -10,13 +10,18 @@ export function useViewStore(
 ): ViewStore {
   const [store] = useState(() => new ViewStore(view));
   const reported = useRef(view);
+  // Through a ref: a new handler must not interrupt a view on its way.
+  const report = useRef(onViewChange);
+  useEffect(() => {
+    report.current = onViewChange;
+  });
   useEffect(
     () =>
       store.onSettled((settled) => {
         reported.current = settled;
-        onViewChange?.(settled);
+        report.current?.(settled);
       }),
-    [store, onViewChange],
+    [store],
   );
   useEffect(() => {
     const isOwn = reported.current !== null && view !== null && isSameView(view, reported.current);
