@@ -6,6 +6,7 @@ import { AuthModule } from '#server/auth/auth.module';
 import { CifModule } from '#server/cif/cif.module';
 import { ConfigModule } from '#server/config/config.module';
 import { DatabaseModule } from '#server/database/database.module';
+import { DemoModule } from '#server/demo/demo.module';
 import { ElectrostaticsModule } from '#server/electrostatics/electrostatics.module';
 import { HealthModule } from '#server/health/health.module';
 import { HttpModule } from '#server/http/http.module';
@@ -37,6 +38,7 @@ import { WorkspacesModule } from '#server/workspaces/workspaces.module';
     LatticesModule,
     ReviewModule,
     SharingModule,
+    DemoModule,
   ],
 })
 export class AppModule {}
