@@ -28,6 +28,8 @@ export default defineConfig({
     rolldownOptions: {
       output: {
         codeSplitting: {
+          // Without this a group draws in what it uses, React too, and every page waits for three.
+          includeDependenciesRecursively: false,
           groups: [
             { name: 'three', test: /node_modules[\\/](three|three-stdlib|@react-three)[\\/]/ },
             {
