@@ -9,9 +9,9 @@ import {
 import { appliedPrototype } from '#common/schemas/prototype';
 import { annotation, annotationList } from '#common/schemas/review';
 import { createdShare, sharedRevision, shareList } from '#common/schemas/sharing';
-import { signIn, startTestApp, type SignedIn, type TestApp } from '#tests/helpers/app';
-import { magnesiaEnergyEv } from '#tests/helpers/cells';
-import { draftEtag, latticesPath } from '#tests/helpers/lattices';
+import { signIn, startTestApp, type SignedIn, type TestApp } from '../helpers/app.js';
+import { magnesiaEnergyEv } from '../helpers/cells.js';
+import { draftEtag, latticesPath } from '../helpers/lattices.js';
 
 let test: TestApp;
 let maker: SignedIn;
