@@ -28,13 +28,17 @@ export default defineConfig({
     rolldownOptions: {
       output: {
         codeSplitting: {
-          // Without this a group draws in what it uses, React too, and every page waits for three.
-          includeDependenciesRecursively: false,
           groups: [
-            { name: 'three', test: /node_modules[\\/](three|three-stdlib|@react-three)[\\/]/ },
+            // Before the others, which would else draw it in: every page would wait for three.
             {
-              name: 'expressions',
-              test: /node_modules[\\/](mathjs|decimal\.js|fraction\.js)[\\/]/,
+              name: 'react',
+              test: /node_modules[\\/](react|react-dom|scheduler|use-sync-external-store)[\\/]/,
+              priority: 2,
+            },
+            {
+              name: 'three',
+              test: /node_modules[\\/](three|three-stdlib|@react-three)[\\/]/,
+              priority: 1,
             },
           ],
         },

@@ -12,6 +12,8 @@ const container = document.getElementById('root');
 if (container === null) {
   throw new Error('The page has no #root to render into.');
 }
+// Pages bring their own title, and the browser shows the first one it finds.
+document.querySelector('head > title')?.remove();
 createRoot(container).render(
   <StrictMode>
     <App />

@@ -25,6 +25,7 @@ export function RouteError(): JSX.Element {
   return (
     <div>
       <title>Something went wrong · Holdfast</title>
+      <h1 className="sr-only">Something went wrong</h1>
       <ErrorState
         error={shown}
         title="This page stopped working"

@@ -1,6 +1,7 @@
 import { createBrowserRouter, type RouteObject } from 'react-router-dom';
 
 import { Home } from '#client/app/home.tsx';
+import { lazyPage } from '#client/app/lazy-page.ts';
 import { RootLayout } from '#client/app/root-layout.tsx';
 import { RootError, RouteError } from '#client/app/route-error.tsx';
 import { SignedInLayout } from '#client/app/signed-in-layout.tsx';
@@ -9,19 +10,22 @@ import { WorkspaceLayout } from '#client/app/workspace-layout.tsx';
 
 /** Pages of a workspace; each is fetched when it is first opened and has its own error boundary. */
 const workspacePages: RouteObject[] = [
-  { index: true, lazy: () => import('#client/routes/shelf.tsx') },
-  { path: 'new', lazy: () => import('#client/routes/new-lattice.tsx') },
-  { path: 'lattices/:lattice', lazy: () => import('#client/routes/lattice.tsx') },
-  { path: 'members', lazy: () => import('#client/routes/members.tsx') },
-  { path: 'settings', lazy: () => import('#client/routes/settings.tsx') },
-  { path: 'audit', lazy: () => import('#client/routes/audit.tsx') },
+  { index: true, lazy: lazyPage(() => import('#client/routes/shelf.tsx')) },
+  { path: 'new', lazy: lazyPage(() => import('#client/routes/new-lattice.tsx')) },
+  { path: 'lattices/:lattice', lazy: lazyPage(() => import('#client/routes/lattice.tsx')) },
+  { path: 'members', lazy: lazyPage(() => import('#client/routes/members.tsx')) },
+  { path: 'settings', lazy: lazyPage(() => import('#client/routes/settings.tsx')) },
+  { path: 'audit', lazy: lazyPage(() => import('#client/routes/audit.tsx')) },
 ];
 
 const publicPages: RouteObject[] = [
-  { path: 'sign-in', lazy: () => import('#client/routes/sign-in.tsx') },
-  { path: 'setup', lazy: () => import('#client/routes/setup.tsx') },
-  { path: 'accept-invite/:token', lazy: () => import('#client/routes/accept-invite.tsx') },
-  { path: 's/:token', lazy: () => import('#client/routes/shared-revision.tsx') },
+  { path: 'sign-in', lazy: lazyPage(() => import('#client/routes/sign-in.tsx')) },
+  { path: 'setup', lazy: lazyPage(() => import('#client/routes/setup.tsx')) },
+  {
+    path: 'accept-invite/:token',
+    lazy: lazyPage(() => import('#client/routes/accept-invite.tsx')),
+  },
+  { path: 's/:token', lazy: lazyPage(() => import('#client/routes/shared-revision.tsx')) },
 ];
 
 const guarded = (pages: RouteObject[], ErrorBoundary = RouteError): RouteObject[] =>
@@ -40,11 +44,14 @@ export const routes: RouteObject[] = [
         ErrorBoundary: RootError,
         children: [
           { index: true, Component: Home },
-          ...guarded([{ path: 'me', lazy: () => import('#client/routes/me.tsx') }]),
+          ...guarded([{ path: 'me', lazy: lazyPage(() => import('#client/routes/me.tsx')) }]),
           { path: 'w/:workspace', Component: WorkspaceLayout, children: guarded(workspacePages) },
         ],
       },
-      ...guarded([{ path: '*', lazy: () => import('#client/routes/not-found.tsx') }], RootError),
+      ...guarded(
+        [{ path: '*', lazy: lazyPage(() => import('#client/routes/not-found.tsx')) }],
+        RootError,
+      ),
     ],
   },
 ];

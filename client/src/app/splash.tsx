@@ -13,6 +13,7 @@ export function Splash(): JSX.Element {
   }, []);
   return (
     <div role="status" aria-label="Loading" className="grid min-h-dvh place-items-center">
+      <title>Holdfast</title>
       {isSlow && <LogoMark className="animate-sheen size-10" />}
     </div>
   );
