@@ -4,6 +4,7 @@ import type { Request } from 'express';
 
 import { Problem } from '#common/errors/problem';
 import { can, type WorkspaceAction } from '#common/policies/workspace-policy';
+import { slug as slugSchema } from '#common/schemas/shared';
 
 import { AccessDirectory } from './access-directory.js';
 import { ROUTE_ACCESS, type RouteAccess } from './access.decorators.js';
@@ -64,7 +65,8 @@ export class AccessGuard implements CanActivate {
     context: UserContext,
     slug: string,
   ): Promise<RequestContext> {
-    const membership = await this.directory.findMembership(context.user.id, slug);
+    const isSlug = slugSchema.safeParse(slug).success;
+    const membership = isSlug ? await this.directory.findMembership(context.user.id, slug) : null;
     if (membership === null) {
       throw new Problem('workspace.not_found');
     }

@@ -14,6 +14,14 @@ describe('findUnstorableText', () => {
     expect(findUnstorableText(value)).toBeNull();
   });
 
+  it('does not follow what is deeper than any contract', () => {
+    let deep: unknown = 'a\0';
+    for (let i = 0; i < 100_000; i += 1) {
+      deep = [deep];
+    }
+    expect(findUnstorableText(deep)).toBeNull();
+  });
+
   it.each([
     ['a\0b', ''],
     [{ name: 'a\0' }, 'name'],

@@ -15,16 +15,7 @@ import type { WorkerPoolStatus } from '#server/health/worker-pool-status';
 
 import type { EvaluationTask, QueuedTask, TaskAnswer } from './evaluation-task.js';
 
-/** Longest that a caller waits, in the queue and for the computation together. */
-const timeLimitMs = 120_000;
-const queuedPerThread = 64;
 const threadMemoryMb = 1_024;
-
-/**
- * A computation that nobody waits for any more may go on for this long: most are done by then, and
- * ending a thread costs more than it saves.
- */
-const graceMs = 1_000;
 
 /** Source files need the loader in each thread; built ones need nothing. */
 const isSource = import.meta.url.endsWith('.ts');
@@ -45,10 +36,23 @@ export class Abandoned extends HttpException {
 export class EvaluationPool implements OnApplicationShutdown, WorkerPoolStatus {
   private readonly logger = new Logger('Evaluation');
   private readonly pool: Piscina<QueuedTask, TaskAnswer>;
-  private readonly maxQueue: number;
 
-  constructor(@Inject(APP_CONFIG) config: AppConfig) {
-    this.maxQueue = queuedPerThread * config.workerThreads;
+  private isClosing = false;
+
+  readonly limits = {
+    /** Longest that a caller waits, in the queue and for the computation together. */
+    waitMs: 120_000,
+    /**
+     * How long a computation that nobody waits for any more may go on: most are done by then, and
+     * ending a thread costs more than it saves.
+     */
+    graceMs: 1_000,
+    /** Tasks that may wait for a thread. */
+    queued: 64,
+  };
+
+  constructor(@Inject(APP_CONFIG) config: Pick<AppConfig, 'workerThreads'>) {
+    this.limits.queued *= config.workerThreads;
     this.pool = new Piscina({
       filename: workerFile,
       name: 'evaluate',
@@ -75,11 +79,11 @@ export class EvaluationPool implements OnApplicationShutdown, WorkerPoolStatus {
     if (abandoned?.aborted === true) {
       throw new Abandoned();
     }
-    if (this.pool.queueSize >= this.maxQueue) {
+    if (this.pool.queueSize >= this.limits.queued) {
       throw new Problem('server.busy');
     }
     const begun = new Int32Array(new SharedArrayBuffer(4));
-    const limit = AbortSignal.timeout(timeLimitMs);
+    const limit = AbortSignal.timeout(this.limits.waitMs);
     const end = new AbortController();
     const leave = () => this.leave(begun, end);
     abandoned?.addEventListener('abort', leave, { once: true });
@@ -96,6 +100,7 @@ export class EvaluationPool implements OnApplicationShutdown, WorkerPoolStatus {
   }
 
   async onApplicationShutdown(): Promise<void> {
+    this.isClosing = true;
     await this.pool.destroy();
   }
 
@@ -103,7 +108,7 @@ export class EvaluationPool implements OnApplicationShutdown, WorkerPoolStatus {
     if (Atomics.load(begun, 0) === 0) {
       end.abort();
     } else {
-      setTimeout(() => end.abort(), graceMs).unref();
+      setTimeout(() => end.abort(), this.limits.graceMs).unref();
     }
   }
 
@@ -111,7 +116,7 @@ export class EvaluationPool implements OnApplicationShutdown, WorkerPoolStatus {
     if (isLate) {
       return new Problem(hasBegun ? 'evaluation.timeout' : 'server.busy');
     }
-    if (isLeft) {
+    if (isLeft || this.isClosing) {
       return new Abandoned();
     }
     this.logger.error({ error });

@@ -7,7 +7,7 @@ import { composition } from '#common/physics/composition';
 import { buildPairLedger, defaultGroupingA } from '#common/physics/pair-ledger';
 import { resolveCell, type CellSymmetryData } from '#common/physics/resolve-cell';
 import type { ResolvedCell } from '#common/physics/resolved-cell';
-import type { EvaluationMethod } from '#common/schemas/cell';
+import type { CellDefinition, EvaluationMethod } from '#common/schemas/cell';
 import { symmetryOf } from '#server/symmetry/space-groups';
 
 import { engineVersion } from '../engine/index.js';
@@ -40,6 +40,19 @@ function identify(
   };
 }
 
+/** The operations of a cell; a failure names the field. */
+function readSymmetry({ symmetry }: CellDefinition): CellSymmetryData {
+  try {
+    return symmetryOf(symmetry);
+  } catch (error) {
+    if (error instanceof Problem && error.details?.fields === undefined) {
+      const { code, message } = error;
+      throw new Problem(code, message, { fields: [{ code, field: 'symmetry', message }] });
+    }
+    throw error;
+  }
+}
+
 /** Pairs counted at most to find one row: as far as a reach can be set on the page, and more. */
 const mostPairs = 4e6;
 
@@ -57,7 +70,7 @@ function hasPair(cell: ResolvedCell, pairKey: string): boolean {
 function perform(task: EvaluationTask): TaskAnswer {
   const started = performance.now();
   const { cell: definition, method } = task;
-  const symmetry = symmetryOf(definition.symmetry);
+  const symmetry = readSymmetry(definition);
   const { cell, problems } = resolveCell(definition, symmetry);
   if (cell === null) {
     const [first] = problems;
