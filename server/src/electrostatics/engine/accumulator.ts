@@ -1,31 +1,13 @@
 /**
- * A running sum with the rounding errors kept beside it: the result is as good as if summed with
- * twice the digits. Source: A. Neumaier, Z. angew. Math. Mech. 54 (1974) 39–51.
+ * Running sums with the rounding errors kept beside them, one per index: the result is as good as
+ * if summed with twice the digits.
+ * Source: A. Neumaier, Z. angew. Math. Mech. 54 (1974) 39–51, with the branch-free error term of
+ * D. E. Knuth, The Art of Computer Programming 2, 4.2.2, theorem B.
  */
-export class Accumulator {
-  private sum = 0;
-
-  private lost = 0;
-
-  /** Adds one term. */
-  add(term: number): void {
-    const next = this.sum + term;
-    this.lost +=
-      Math.abs(this.sum) >= Math.abs(term) ? this.sum - next + term : term - next + this.sum;
-    this.sum = next;
-  }
-
-  /** The sum of all terms so far. */
-  get value(): number {
-    return this.sum + this.lost;
-  }
-}
-
-/** Many running sums with compensation, one per index. */
 export class AccumulatorArray {
-  private readonly sums: Float64Array;
+  readonly sums: Float64Array;
 
-  private readonly lost: Float64Array;
+  readonly lost: Float64Array;
 
   constructor(readonly length: number) {
     this.sums = new Float64Array(length);
@@ -36,7 +18,8 @@ export class AccumulatorArray {
   add(index: number, term: number): void {
     const sum = this.sums[index]!;
     const next = sum + term;
-    this.lost[index]! += Math.abs(sum) >= Math.abs(term) ? sum - next + term : term - next + sum;
+    const taken = next - sum;
+    this.lost[index]! += sum - (next - taken) + (term - taken);
     this.sums[index] = next;
   }
 
@@ -44,4 +27,18 @@ export class AccumulatorArray {
   value(index: number): number {
     return this.sums[index]! + this.lost[index]!;
   }
+
+  /** All sums so far. */
+  values(): Float64Array {
+    return this.sums.map((sum, index) => sum + this.lost[index]!);
+  }
+}
+
+/** The compensated sum of a list. */
+export function sumOf(terms: Iterable<number>): number {
+  const total = new AccumulatorArray(1);
+  for (const term of terms) {
+    total.add(0, term);
+  }
+  return total.value(0);
 }

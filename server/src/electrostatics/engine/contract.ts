@@ -65,10 +65,14 @@ export interface RawSums {
   /** ∂E/∂ε: xx, yy, zz, yz, xz, xy. */
   readonly strainDerivative: readonly number[];
   readonly speciesMatrix: readonly (readonly number[])[];
-  /** Sum of the sizes of the parts, for the rounding estimate. */
+  /** Sum of the sizes of the parts of the energy, for the rounding estimate. */
   readonly magnitude: number;
+  /** The same for the potential of any one site. */
+  readonly potentialMagnitude: number;
   readonly realTerms: number;
   readonly reciprocalTerms: number;
+  /** Zero if two sites coincide; the sums mean nothing then. */
+  readonly shortestDistanceA: number;
 }
 
 /** The cell as the sums use it: sites sorted by species, positions wrapped. */
@@ -89,7 +93,6 @@ export interface PreparedCell {
   readonly chargeSum: number;
   readonly chargeSquareSum: number;
   readonly absoluteChargeSum: number;
-  readonly shortestDistanceA: number;
 }
 
 /** Splitting parameter and cut-offs of one evaluation. */

@@ -8,27 +8,32 @@ import type {
   RawSums,
   SplittingPlan,
 } from './contract.js';
-import { energyTruncation, planSplitting } from './plan.js';
+import { truncation, planSplitting, type Allowances } from './plan.js';
 import { prepareCell } from './prepare.js';
 import { sumOnce } from './sum.js';
 
 /** Named in every result, and part of its content hash: a change of digits needs a new one. */
-export const engineVersion = 'ewald-gaussian-1';
+export const engineVersion = 'ewald-gaussian-2';
 
 /** The second splitting parameter of the certificate, relative to the first. */
 const secondSplitting = 1.2;
 
-/** Rounding of compensated sums of parts much like the whole, in units of 2⁻⁵². */
+/** Rounding of compensated sums of parts, in units of 2⁻⁵² of their sizes; see the tests. */
 const roundingUnits = 8;
 
-/** The two evaluations and what follows from them. */
+/** A net charge below this part of Σ|q| is the rounding of thirds and the like. */
+const neutralWithin = 1e-10;
+
+/** The two evaluations and what follows from them, in e²/Å and e/Å. */
 interface Pair {
-  readonly cell: PreparedCell;
+  readonly input: EngineInput;
   readonly plans: readonly [SplittingPlan, SplittingPlan];
   readonly first: RawSums;
   readonly second: RawSums;
-  /** Truncation and rounding of the energy, e²/Å, before the comparison. */
-  readonly allowance: number;
+  /** Truncation and rounding of the first evaluation. */
+  readonly allowances: Allowances;
+  /** What the requested tolerance allows, e²/Å: ε Σq²/d₀. */
+  readonly tolerance: number;
 }
 
 function largestDifference(a: ArrayLike<number>, b: ArrayLike<number>): number {
@@ -39,27 +44,43 @@ function largestDifference(a: ArrayLike<number>, b: ArrayLike<number>): number {
   return largest;
 }
 
-function certify(pair: Pair, input: EngineInput): EngineCertificate {
-  const { cell, first, second, plans, allowance } = pair;
+function allowancesFor(cell: PreparedCell, plan: SplittingPlan, sums: RawSums): Allowances {
+  const cut = truncation(cell, plan);
+  const unit = roundingUnits * Number.EPSILON;
+  return {
+    energy: cut.energy + unit * sums.magnitude,
+    potential: cut.potential + unit * sums.potentialMagnitude,
+    // A strain derivative is made of parts about twice as large, one of them negative.
+    strainDerivative: cut.strainDerivative + 4 * unit * sums.magnitude,
+  };
+}
+
+/**
+ * What must hold whatever the cell: E independent of η; tr(∂E/∂ε) = −E, for E is homogeneous of
+ * degree −1 in lengths; ΣF = 0, by translation; ½Σqφ = E, for E is quadratic in the charges.
+ */
+function certify({ input, plans, first, second, allowances, tolerance }: Pair): EngineCertificate {
   const k = COULOMB_EV_ANGSTROM;
-  const trace =
-    first.strainDerivative[0]! + first.strainDerivative[1]! + first.strainDerivative[2]!;
-  const halfSum = 0.5 * first.potentials.reduce((sum, phi, i) => sum + phi * input.chargesE[i]!, 0);
-  const force = [0, 1, 2].map((axis) =>
-    input.chargesE.reduce((sum, q, i) => sum + q * first.fields[3 * i + axis]!, 0),
-  );
+  const { chargesE } = input;
+  const [xx, yy, zz] = first.strainDerivative as [number, number, number];
+  let halfSum = 0;
+  const force = [0, 0, 0];
+  for (let i = 0; i < chargesE.length; i += 1) {
+    halfSum += 0.5 * chargesE[i]! * first.potentials[i]!;
+    for (let axis = 0; axis < 3; axis += 1) {
+      force[axis]! += chargesE[i]! * first.fields[3 * i + axis]!;
+    }
+  }
   const energyDifference = Math.abs(first.energy - second.energy);
-  const virialResidual = Math.abs(trace + first.energy);
+  const virialResidual = Math.abs(xx + yy + zz + first.energy);
   const potentialResidual = Math.abs(halfSum - first.energy);
   const forceSum = Math.hypot(...force);
-  const scale = (input.toleranceRelative * cell.chargeSquareSum) / cell.shortestDistanceA;
-  const allowed = scale + allowance;
-  // Derivatives feel the cut-off one to two orders more than the energy.
+  const strainAllowed = tolerance + 3 * allowances.strainDerivative;
   const agrees =
-    energyDifference <= allowed &&
-    potentialResidual <= allowed &&
-    virialResidual <= 30 * allowed &&
-    forceSum <= (30 * allowed) / cell.shortestDistanceA;
+    energyDifference <= tolerance + allowances.energy &&
+    potentialResidual <= tolerance + allowances.energy &&
+    virialResidual <= strainAllowed &&
+    forceSum <= strainAllowed / first.shortestDistanceA;
   return {
     splittingPerA: [plans[0].splittingPerA, plans[1].splittingPerA],
     realCutoffA: plans[0].realCutoffA,
@@ -74,36 +95,28 @@ function certify(pair: Pair, input: EngineInput): EngineCertificate {
   };
 }
 
-function scaled(values: Float64Array, factor: number): Float64Array {
-  return values.map((value) => value * factor);
-}
-
-function present(pair: Pair, input: EngineInput): EngineResult {
-  const { cell, first, second, allowance } = pair;
+function present(pair: Pair, volumeA3: number): EngineResult {
+  const { input, first, second, allowances } = pair;
   const k = COULOMB_EV_ANGSTROM;
-  const energyBound = allowance + Math.abs(first.energy - second.energy);
-  // A potential's share of the truncation: per unit charge, of one site among Σ|q|.
-  const potentialAllowance = (2 * allowance) / cell.absoluteChargeSum;
-  const potentialBound =
-    potentialAllowance + largestDifference(first.potentials, second.potentials);
-  const strainBound =
-    30 * allowance + largestDifference(first.strainDerivative, second.strainDerivative);
-  const matrixBound =
-    allowance + largestDifference(first.speciesMatrix.flat(), second.speciesMatrix.flat());
-  const forces = first.fields.map((field, i) => field * input.chargesE[Math.floor(i / 3)]!);
+  const differences = {
+    energy: Math.abs(first.energy - second.energy),
+    potential: largestDifference(first.potentials, second.potentials),
+    strain: largestDifference(first.strainDerivative, second.strainDerivative),
+    matrix: largestDifference(first.speciesMatrix.flat(), second.speciesMatrix.flat()),
+  };
   return {
     energyEv: k * first.energy,
-    energyBoundEv: k * energyBound,
-    potentialsV: scaled(first.potentials, k),
-    potentialBoundV: k * potentialBound,
-    fieldsVPerA: scaled(first.fields, k),
-    forcesEvPerA: scaled(forces, k),
-    stressEvPerA3: first.strainDerivative.map((value) => (k * value) / cell.volumeA3),
-    stressBoundEvPerA3: (k * strainBound) / cell.volumeA3,
+    energyBoundEv: k * (allowances.energy + differences.energy),
+    potentialsV: first.potentials.map((phi) => k * phi),
+    potentialBoundV: k * (allowances.potential + differences.potential),
+    fieldsVPerA: first.fields.map((field) => k * field),
+    forcesEvPerA: first.fields.map((field, i) => k * input.chargesE[Math.floor(i / 3)]! * field),
+    stressEvPerA3: first.strainDerivative.map((value) => (k * value) / volumeA3),
+    stressBoundEvPerA3: (k * (allowances.strainDerivative + differences.strain)) / volumeA3,
     speciesMatrixEv: first.speciesMatrix.map((row) => row.map((value) => k * value)),
-    speciesMatrixBoundEv: k * matrixBound,
-    shortestDistanceA: cell.shortestDistanceA,
-    certificate: certify(pair, input),
+    speciesMatrixBoundEv: k * (allowances.energy + differences.matrix),
+    shortestDistanceA: first.shortestDistanceA,
+    certificate: certify(pair),
   };
 }
 
@@ -113,25 +126,28 @@ function present(pair: Pair, input: EngineInput): EngineResult {
  * surface-dipole term):
  * E = ½k Σ_ij Σ'_n q_i q_j erfc(ηr)/r + (2πk/V) Σ_{G≠0} exp(−G²/4η²)/G² |S(G)|²
  *     − k(η/√π) Σq² − (πk/2Vη²) Q².
- * Computed twice, with two splitting parameters; the difference enters the bound and the
- * certificate.
+ * Computed twice, with two splitting parameters; the difference enters the bounds and the
+ * certificate. Time grows as N^{3/2}, memory as N.
  *
- * @throws RangeError if arrays disagree, two sites coincide, or the cell is charged and
- *   `uniformBackground` is not set: callers check these first and say so to the person
+ * @throws RangeError if arrays disagree, a number is not finite, two sites coincide, or the cell is
+ *   charged and `uniformBackground` is not set: callers check these first and say so to the person
  */
 export function evaluateElectrostatics(input: EngineInput): EngineResult {
-  const cell = prepareCell(input);
-  const isNeutral = Math.abs(cell.chargeSum) <= 1e-10 * cell.absoluteChargeSum;
+  const prepared = prepareCell(input);
+  const isNeutral = Math.abs(prepared.chargeSum) <= neutralWithin * prepared.absoluteChargeSum;
   if (!isNeutral && input.uniformBackground !== true) {
     throw new RangeError('the cell is charged and no uniform background was asked for');
   }
-  const neutral = isNeutral ? { ...cell, chargeSum: 0 } : cell;
+  const cell = isNeutral ? { ...prepared, chargeSum: 0 } : prepared;
   const factor = input.splittingFactor ?? 1;
-  const plans = [factor, factor * secondSplitting].map((f) =>
-    planSplitting(neutral, input.toleranceRelative, f),
-  ) as [SplittingPlan, SplittingPlan];
-  const [first, second] = plans.map((plan) => sumOnce(neutral, plan)) as [RawSums, RawSums];
-  const rounding = roundingUnits * Number.EPSILON * first.magnitude;
-  const allowance = energyTruncation(neutral, plans[0]) + rounding;
-  return present({ cell: neutral, plans, first, second, allowance }, input);
+  const plan = (f: number) => planSplitting(cell, input.toleranceRelative, f);
+  const plans: [SplittingPlan, SplittingPlan] = [plan(factor), plan(factor * secondSplitting)];
+  const first = sumOnce(cell, plans[0]);
+  if (!(first.shortestDistanceA > 0)) {
+    throw new RangeError('two sites coincide');
+  }
+  const second = sumOnce(cell, plans[1]);
+  const allowances = allowancesFor(cell, plans[0], first);
+  const tolerance = (input.toleranceRelative * cell.chargeSquareSum) / first.shortestDistanceA;
+  return present({ input, plans, first, second, allowances, tolerance }, cell.volumeA3);
 }

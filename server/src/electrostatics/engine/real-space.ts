@@ -1,83 +1,200 @@
-import { buildNeighbourGrid, forEachNeighbour } from '#common/physics/neighbours';
-
-import { Accumulator, AccumulatorArray } from './accumulator.js';
+import { AccumulatorArray } from './accumulator.js';
+import { buildBins, type Bins } from './bins.js';
+import { Candidates } from './candidates.js';
 import type { PreparedCell, SplittingPlan } from './contract.js';
-import { erfcWithGaussian } from './erfc.js';
+import { erfcTable, intervalStride, intervalsPerUnit, polynomialAt } from './erfc.js';
 
 /** The real-space sum: energies by species, potentials, fields, strain derivative. */
 export interface RealSpaceSums {
-  readonly bySpecies: readonly (readonly Accumulator[])[];
+  /** Energy of species s with t ≥ s at s·K + t, both orders of a pair counted. */
+  readonly bySpecies: AccumulatorArray;
   readonly potentials: AccumulatorArray;
-  readonly fields: AccumulatorArray;
-  readonly strainDerivative: readonly Accumulator[];
+  readonly fields: Float64Array;
+  readonly strainDerivative: AccumulatorArray;
   readonly terms: number;
+  readonly shortestDistanceA: number;
 }
 
 const twoOverSqrtPi = 2 / Math.sqrt(Math.PI);
 
 /**
+ * The sum as it runs: bin by bin, site by site, species by species. A site's own share is summed in
+ * local variables and moved to the totals once; the other ion of a pair gets its share at once.
+ */
+class RealSpaceSum implements RealSpaceSums {
+  readonly bySpecies: AccumulatorArray;
+
+  readonly potentials: AccumulatorArray;
+
+  readonly fields: Float64Array;
+
+  readonly strainDerivative = new AccumulatorArray(6);
+
+  terms = 0;
+
+  shortestSquare = Infinity;
+
+  private readonly kinds: number;
+
+  private readonly bins: Bins;
+
+  private readonly near: Candidates;
+
+  /** Sums of the site at hand over one species: φ, field, strain derivative. */
+  private readonly own = new Float64Array(10);
+
+  constructor(
+    private readonly cell: PreparedCell,
+    private readonly plan: SplittingPlan,
+  ) {
+    this.kinds = cell.speciesStart.length - 1;
+    this.bySpecies = new AccumulatorArray(this.kinds * this.kinds);
+    this.potentials = new AccumulatorArray(cell.count);
+    this.fields = new Float64Array(3 * cell.count);
+    this.bins = buildBins(cell, plan.realCutoffA);
+    this.near = new Candidates(cell, this.bins, plan.realCutoffA);
+  }
+
+  get shortestDistanceA(): number {
+    return Math.sqrt(this.shortestSquare);
+  }
+
+  run(): void {
+    const { start, order } = this.bins;
+    for (let bin = 0; bin + 1 < start.length; bin += 1) {
+      if (start[bin]! === start[bin + 1]!) {
+        continue;
+      }
+      this.near.gather(bin);
+      for (let position = start[bin]!; position < start[bin + 1]!; position += 1) {
+        this.addSite(order[position]!);
+      }
+    }
+  }
+
+  /** All pairs of one site with what its bin's candidates hold, species by species. */
+  private addSite(i: number): void {
+    const { near, own, kinds } = this;
+    const qi = this.cell.charges[i]!;
+    const s = this.cell.species[i]!;
+    for (let t = 0; t < kinds; t += 1) {
+      const hits = near.select(i, t);
+      if (hits === 0) {
+        continue;
+      }
+      this.terms += hits;
+      this.sumHits(i, hits);
+      this.bySpecies.add(s < t ? s * kinds + t : t * kinds + s, qi * own[0]!);
+      this.potentials.add(i, own[0]!);
+      for (let axis = 0; axis < 3; axis += 1) {
+        this.fields[3 * i + axis]! += own[1 + axis]!;
+      }
+      for (let k = 0; k < 6; k += 1) {
+        this.strainDerivative.add(k, qi * own[4 + k]!);
+      }
+    }
+  }
+
+  /** The innermost loop: kernels of the selected candidates, booked for both ions of each pair. */
+  private sumHits(i: number, hits: number): void {
+    const { own, fields } = this;
+    const { sums, lost } = this.potentials;
+    const { hitSite, hitX, hitY, hitZ, hitSquare } = this.near;
+    const charges = this.cell.charges;
+    const qi = charges[i]!;
+    const eta = this.plan.splittingPerA;
+    const closeSquare = this.near.closeSquare;
+    const gaussianFactor = twoOverSqrtPi * eta;
+    // One variable each: an array would cost more than the arithmetic.
+    let phi = 0;
+    let phiLost = 0;
+    let ex = 0;
+    let ey = 0;
+    let ez = 0;
+    let xx = 0;
+    let yy = 0;
+    let zz = 0;
+    let yz = 0;
+    let xz = 0;
+    let xy = 0;
+    let shortest = this.shortestSquare;
+    for (let hit = 0; hit < hits; hit += 1) {
+      if (hitSquare[hit]! < closeSquare) {
+        this.near.refine(i, hit);
+      }
+      const square = hitSquare[hit]!;
+      shortest = square < shortest ? square : shortest;
+      const r = Math.sqrt(square);
+      // erfc and the Gaussian from their table: interval, then distance from its centre.
+      const x = eta * r;
+      const interval = (x * intervalsPerUnit) | 0;
+      const t = x - (interval + 0.5) / intervalsPerUnit;
+      const base = interval * intervalStride;
+      const inverse = 1 / r;
+      const screened = polynomialAt(erfcTable, base, t) * inverse;
+      const gaussian = gaussianFactor * polynomialAt(erfcTable, base + 8, t);
+      const slope = (screened + gaussian) * inverse * inverse;
+      const j = hitSite[hit]!;
+      const qj = charges[j]!;
+      const dx = hitX[hit]!;
+      const dy = hitY[hit]!;
+      const dz = hitZ[hit]!;
+      // This ion: potential with its rounding errors kept, field and strain derivative plainly.
+      const term = qj * screened;
+      const next = phi + term;
+      const taken = next - phi;
+      phiLost += phi - (next - taken) + (term - taken);
+      phi = next;
+      const pull = qj * slope;
+      const px = pull * dx;
+      const py = pull * dy;
+      const pz = pull * dz;
+      ex -= px;
+      ey -= py;
+      ez -= pz;
+      xx -= px * dx;
+      yy -= py * dy;
+      zz -= pz * dz;
+      yz -= py * dz;
+      xz -= px * dz;
+      xy -= px * dy;
+      // The other ion: it sees the vector reversed.
+      const before = sums[j]!;
+      const after = before + qi * screened;
+      const gained = after - before;
+      lost[j]! += before - (after - gained) + (qi * screened - gained);
+      sums[j] = after;
+      const push = qi * slope;
+      fields[3 * j]! += push * dx;
+      fields[3 * j + 1]! += push * dy;
+      fields[3 * j + 2]! += push * dz;
+    }
+    this.shortestSquare = shortest;
+    own[0] = phi + phiLost;
+    own[1] = ex;
+    own[2] = ey;
+    own[3] = ez;
+    own[4] = xx;
+    own[5] = yy;
+    own[6] = zz;
+    own[7] = yz;
+    own[8] = xz;
+    own[9] = xy;
+  }
+}
+
+/**
  * ½ Σ_ij Σ'_n q_i q_j erfc(ηr)/r within the cut-off, with φ_i = Σ q_j erfc(ηr)/r, the field
  * −∇φ and ∂E/∂ε_ab = −½ Σ q_i q_j g(r) r_a r_b, where
  * g(r) = (erfc(ηr)/r + 2η/√π exp(−η²r²))/r².
- * Source: physics of the method in P. P. Ewald, Ann. Phys. 369 (1921) 253; strain derivatives as
- * in D. M. Heyes, Phys. Rev. B 49 (1994) 755.
+ * Source: P. P. Ewald, Ann. Phys. 369 (1921) 253; strain derivatives as in D. M. Heyes,
+ * Phys. Rev. B 49 (1994) 755.
  *
- * Each pair of different sites is visited once and booked for both; a site with its own images is
- * booked with half weight, since every image appears with its opposite.
+ * Each pair is visited once and booked for both ions; of a site's own images at T and −T only one
+ * is visited, so that booking it for both ions counts the two.
  */
 export function sumRealSpace(cell: PreparedCell, plan: SplittingPlan): RealSpaceSums {
-  const { count, charges, species } = cell;
-  const eta = plan.splittingPerA;
-  const kinds = cell.speciesStart.length - 1;
-  const bySpecies = Array.from({ length: kinds }, () =>
-    Array.from({ length: kinds }, () => new Accumulator()),
-  );
-  const potentials = new AccumulatorArray(count);
-  const fields = new AccumulatorArray(3 * count);
-  const strainDerivative = Array.from({ length: 6 }, () => new Accumulator());
-  const [xx, yy, zz, yz, xz, xy] = strainDerivative as [
-    Accumulator,
-    Accumulator,
-    Accumulator,
-    Accumulator,
-    Accumulator,
-    Accumulator,
-  ];
-  const grid = buildNeighbourGrid(cell.vectorsA, cell.fractional, plan.realCutoffA);
-  let terms = 0;
-  for (let i = 0; i < count; i += 1) {
-    const qi = charges[i]!;
-    forEachNeighbour(grid, i, plan.realCutoffA, (j, r, _image, dx, dy, dz) => {
-      if (j < i) {
-        return;
-      }
-      terms += 1;
-      const x = eta * r;
-      const gaussian = Math.exp(-x * x);
-      const screened = erfcWithGaussian(x, gaussian) / r;
-      const slope = (screened + twoOverSqrtPi * eta * gaussian) / (r * r);
-      const qj = charges[j]!;
-      const weight = j === i ? 0.5 : 1;
-      const strength = qi * qj * weight;
-      bySpecies[species[i]!]![species[j]!]!.add(strength * screened);
-      potentials.add(i, qj * screened);
-      fields.add(3 * i, -qj * slope * dx);
-      fields.add(3 * i + 1, -qj * slope * dy);
-      fields.add(3 * i + 2, -qj * slope * dz);
-      if (j !== i) {
-        potentials.add(j, qi * screened);
-        fields.add(3 * j, qi * slope * dx);
-        fields.add(3 * j + 1, qi * slope * dy);
-        fields.add(3 * j + 2, qi * slope * dz);
-      }
-      const pull = -strength * slope;
-      xx.add(pull * dx * dx);
-      yy.add(pull * dy * dy);
-      zz.add(pull * dz * dz);
-      yz.add(pull * dy * dz);
-      xz.add(pull * dx * dz);
-      xy.add(pull * dx * dy);
-    });
-  }
-  return { bySpecies, potentials, fields, strainDerivative, terms };
+  const sum = new RealSpaceSum(cell, plan);
+  sum.run();
+  return sum;
 }

@@ -1,10 +1,11 @@
-import { Accumulator } from './accumulator.js';
+import { sumOf } from './accumulator.js';
 import type { PreparedCell, RawSums, SplittingPlan } from './contract.js';
 import { sumRealSpace, type RealSpaceSums } from './real-space.js';
 import { sumReciprocalSpace, type ReciprocalSums } from './reciprocal-space.js';
 
 const sqrtPi = Math.sqrt(Math.PI);
 
+/** Σq and Σq² of each class. */
 function chargeBySpecies(cell: PreparedCell): { sum: number; squareSum: number }[] {
   return Array.from({ length: cell.speciesStart.length - 1 }, (_, s) => {
     const charges = cell.charges.subarray(cell.speciesStart[s], cell.speciesStart[s + 1]);
@@ -27,29 +28,44 @@ function speciesMatrix(
   reciprocal: ReciprocalSums,
 ): { matrix: number[][]; energy: number; magnitude: number } {
   const classes = chargeBySpecies(cell);
-  const matrix = classes.map(() => classes.map(() => 0));
-  const energy = new Accumulator();
-  let magnitude = 0;
-  for (let s = 0; s < classes.length; s += 1) {
-    for (let t = s; t < classes.length; t += 1) {
-      const parts = [real.bySpecies[s]![t]!.value, reciprocal.bySpecies[s]![t]!.value];
-      parts.push(s === t ? (-eta / sqrtPi) * classes[s]!.squareSum : real.bySpecies[t]![s]!.value);
-      const background =
-        (-Math.PI / (2 * cell.volumeA3 * eta * eta)) *
-        classes[s]!.sum *
-        classes[t]!.sum *
-        (s === t ? 1 : 2);
-      const entry = new Accumulator();
-      [...parts, background].forEach((part) => entry.add(part));
-      matrix[s]![t] = entry.value;
-      matrix[t]![s] = entry.value;
-      // Backgrounds of a neutral cell cancel exactly on paper: only the net one enters the energy.
-      parts.forEach((part) => energy.add(part));
-      magnitude += parts.reduce((sum, part) => sum + Math.abs(part), 0);
+  const kinds = classes.length;
+  const matrix = classes.map(() => new Array<number>(kinds).fill(0));
+  const backgroundFactor = -Math.PI / (2 * cell.volumeA3 * eta * eta);
+  // Backgrounds of a neutral cell cancel exactly on paper: only the net one enters the energy.
+  const energyParts = [backgroundFactor * cell.chargeSum ** 2];
+  for (let s = 0; s < kinds; s += 1) {
+    for (let t = s; t < kinds; t += 1) {
+      const parts = [
+        real.bySpecies.value(s * kinds + t),
+        reciprocal.bySpecies.value(s * kinds + t),
+      ];
+      if (s === t) {
+        parts.push((-eta / sqrtPi) * classes[s]!.squareSum);
+      }
+      const background = backgroundFactor * classes[s]!.sum * classes[t]!.sum * (s === t ? 1 : 2);
+      matrix[s]![t] = sumOf([...parts, background]);
+      matrix[t]![s] = matrix[s]![t]!;
+      energyParts.push(...parts);
     }
   }
-  energy.add((-Math.PI / (2 * cell.volumeA3 * eta * eta)) * cell.chargeSum ** 2);
-  return { matrix, energy: energy.value, magnitude };
+  const magnitude = energyParts.reduce((sum, part) => sum + Math.abs(part), 0);
+  return { matrix, energy: sumOf(energyParts), magnitude };
+}
+
+/** Size of the parts that make up the potential of a site, the largest over the sites. */
+function potentialMagnitude(
+  cell: PreparedCell,
+  eta: number,
+  real: RealSpaceSums,
+  reciprocal: ReciprocalSums,
+): number {
+  let largest = 0;
+  for (let i = 0; i < cell.count; i += 1) {
+    const parts = Math.abs(real.potentials.value(i)) + Math.abs(reciprocal.potentials.value(i));
+    largest = Math.max(largest, parts + (2 * eta * Math.abs(cell.charges[i]!)) / sqrtPi);
+  }
+  // Neighbours of either sign at mean density: Σ|q| erfc(ηr)/r → π Σ|q|/(V η²).
+  return largest + (Math.PI * cell.absoluteChargeSum) / (cell.volumeA3 * eta * eta);
 }
 
 /** Potentials and fields in the order of the input, self and background terms added. */
@@ -64,15 +80,10 @@ function siteSums(
   const background = (-Math.PI / (cell.volumeA3 * eta * eta)) * cell.chargeSum;
   for (let i = 0; i < cell.count; i += 1) {
     const original = cell.originalIndex[i]!;
-    const potential = new Accumulator();
-    potential.add(real.potentials.value(i));
-    potential.add(reciprocal.potentials.value(i));
-    potential.add((-2 * eta * cell.charges[i]!) / sqrtPi);
-    potential.add(background);
-    potentials[original] = potential.value;
+    const parts = [real.potentials.value(i), reciprocal.potentials.value(i)];
+    potentials[original] = sumOf([...parts, (-2 * eta * cell.charges[i]!) / sqrtPi, background]);
     for (let axis = 0; axis < 3; axis += 1) {
-      fields[3 * original + axis] =
-        real.fields.value(3 * i + axis) + reciprocal.fields.value(3 * i + axis);
+      fields[3 * original + axis] = real.fields[3 * i + axis]! + reciprocal.fields[3 * i + axis]!;
     }
   }
   return { potentials, fields };
@@ -86,8 +97,11 @@ export function sumOnce(cell: PreparedCell, plan: SplittingPlan): RawSums {
   const { matrix, energy, magnitude } = speciesMatrix(cell, eta, real, reciprocal);
   // The background −πQ²/(2Vη²) shrinks as the cell swells: its derivative is +π Q²/(2Vη²) on the diagonal.
   const background = (Math.PI * cell.chargeSum ** 2) / (2 * cell.volumeA3 * eta * eta);
-  const strainDerivative = real.strainDerivative.map(
-    (part, k) => part.value + reciprocal.strainDerivative[k]!.value + (k < 3 ? background : 0),
+  const strainDerivative = [0, 1, 2, 3, 4, 5].map(
+    (k) =>
+      real.strainDerivative.value(k) +
+      reciprocal.strainDerivative.value(k) +
+      (k < 3 ? background : 0),
   );
   return {
     energy,
@@ -95,7 +109,9 @@ export function sumOnce(cell: PreparedCell, plan: SplittingPlan): RawSums {
     strainDerivative,
     speciesMatrix: matrix,
     magnitude,
+    potentialMagnitude: potentialMagnitude(cell, eta, real, reciprocal),
     realTerms: real.terms,
     reciprocalTerms: reciprocal.terms,
+    shortestDistanceA: real.shortestDistanceA,
   };
 }
