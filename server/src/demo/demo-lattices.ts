@@ -5,7 +5,7 @@ import type { Prototype } from '#server/prototypes/prototypes';
 import type { DemoPersonKey } from './demo-people.js';
 
 /** How far a lattice of the demo has come. */
-export type DemoProgress = 'draft' | 'saved' | 'in_review' | 'returned' | 'accepted';
+type DemoProgress = 'draft' | 'saved' | 'in_review' | 'returned' | 'accepted';
 
 export interface DemoLattice {
   readonly name: string;

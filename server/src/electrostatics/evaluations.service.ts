@@ -12,7 +12,7 @@ import { assertCan, type RequestContext } from '#server/http/request-context';
 
 import type { EvaluationRow } from './evaluation.table.js';
 import { EvaluationsRepository } from './evaluations.repository.js';
-import { EvaluationPool } from './jobs/evaluation-pool.js';
+import { Abandoned, EvaluationPool } from './jobs/evaluation-pool.js';
 import type { CellIdentity } from './jobs/evaluation-task.js';
 
 type Computed =
@@ -132,6 +132,9 @@ export class EvaluationsService {
     method: EvaluationMethod,
     gone?: AbortSignal,
   ): Promise<Computed> {
+    if (gone?.aborted === true) {
+      throw new Abandoned();
+    }
     const flight = this.flights.get(hash) ?? this.start(hash, cell, method);
     flight.waiting += 1;
     const leave = () => {

@@ -24,7 +24,7 @@ interface Person {
   readonly name: string;
 }
 
-export type ReplyRow = AnnotationReplyRow & { readonly author: Person };
+type ReplyRow = AnnotationReplyRow & { readonly author: Person };
 
 /** A remark with who is behind it and what was answered. */
 export type AnnotationFullRow = AnnotationRow & {
