@@ -22,6 +22,8 @@ export interface NeighbourGrid {
   /** Cartesian positions of the sites, three numbers each. */
   readonly positionsA: Float64Array;
   readonly fractional: Float64Array;
+  /** Distances between opposite faces of the cell. */
+  readonly heightsA: readonly [number, number, number];
   readonly binsPerAxis: readonly [number, number, number];
   /** Sites of bin b are `order[start[b]] … order[start[b + 1] − 1]`. */
   readonly start: Int32Array;
@@ -59,7 +61,8 @@ export function buildNeighbourGrid(
   const wrapped = Float64Array.from(fractional, wrap);
   const positionsA = new Float64Array(fractional.length);
   const perSite = Math.cbrt(cellVolumeA3(vectorsA) / Math.max(count, 1));
-  const binsPerAxis = faceDistancesA(vectorsA).map((height) =>
+  const heightsA = faceDistancesA(vectorsA);
+  const binsPerAxis = heightsA.map((height) =>
     Math.max(1, Math.min(binsLimit, Math.floor(height / Math.max(radiusA / 2, perSite)))),
   ) as [number, number, number];
   const [nx, ny, nz] = binsPerAxis;
@@ -82,7 +85,16 @@ export function buildNeighbourGrid(
   for (let i = 0; i < count; i += 1) {
     order[next[binOf[i]!]!++] = i;
   }
-  return { vectorsA, positionsA, fractional: wrapped, binsPerAxis, start, order };
+  return { vectorsA, positionsA, fractional: wrapped, heightsA, binsPerAxis, start, order };
+}
+
+/** Where a query looks: the central site and the radius. */
+interface Query {
+  readonly siteIndex: number;
+  readonly radiusA: number;
+  readonly xA: number;
+  readonly yA: number;
+  readonly zA: number;
 }
 
 /** Visits the sites of one bin, seen in one image of the cell. */
@@ -90,18 +102,23 @@ function visitBin(
   grid: NeighbourGrid,
   bin: number,
   image: readonly [number, number, number],
-  centreA: readonly [number, number, number],
-  radiusA: number,
+  query: Query,
   visit: NeighbourVisitor,
 ): void {
-  const [sx, sy, sz] = fractionalToCartesian(grid.vectorsA, image);
-  for (let k = grid.start[bin]!; k < grid.start[bin + 1]!; k += 1) {
-    const j = grid.order[k]!;
-    const dx = grid.positionsA[3 * j]! + sx - centreA[0];
-    const dy = grid.positionsA[3 * j + 1]! + sy - centreA[1];
-    const dz = grid.positionsA[3 * j + 2]! + sz - centreA[2];
+  const { vectorsA: v, positionsA, start, order } = grid;
+  const [ix, iy, iz] = image;
+  const sx = ix * v[0]! + iy * v[3]! + iz * v[6]! - query.xA;
+  const sy = ix * v[1]! + iy * v[4]! + iz * v[7]! - query.yA;
+  const sz = ix * v[2]! + iy * v[5]! + iz * v[8]! - query.zA;
+  const isHome = ix === 0 && iy === 0 && iz === 0;
+  const end = start[bin + 1]!;
+  for (let k = start[bin]!; k < end; k += 1) {
+    const j = order[k]!;
+    const dx = positionsA[3 * j]! + sx;
+    const dy = positionsA[3 * j + 1]! + sy;
+    const dz = positionsA[3 * j + 2]! + sz;
     const square = dx * dx + dy * dy + dz * dz;
-    if (square <= radiusA * radiusA) {
+    if (square <= query.radiusA * query.radiusA && !(isHome && j === query.siteIndex)) {
       visit(j, Math.sqrt(square), image, dx, dy, dz);
     }
   }
@@ -113,6 +130,7 @@ function visitBin(
  * look through along an axis follows from the distance between faces.
  *
  * @param siteIndex the central site, taken in the home cell
+ * @param radiusA any radius; the search is quickest near the one the grid was built for
  */
 export function forEachNeighbour(
   grid: NeighbourGrid,
@@ -120,30 +138,36 @@ export function forEachNeighbour(
   radiusA: number,
   visit: NeighbourVisitor,
 ): void {
-  const centreA = [0, 1, 2].map((axis) => grid.positionsA[3 * siteIndex + axis]!) as [
-    number,
-    number,
-    number,
-  ];
-  const heights = faceDistancesA(grid.vectorsA);
-  const home = grid.binsPerAxis.map((bins, axis) =>
-    Math.floor(grid.fractional[3 * siteIndex + axis]! * bins),
-  );
-  const span = grid.binsPerAxis.map((bins, axis) => Math.ceil((radiusA * bins) / heights[axis]!));
-  const [nx, ny, nz] = grid.binsPerAxis;
-  const withoutSelf: NeighbourVisitor = (j, distanceA, image, dxA, dyA, dzA) => {
-    if (j !== siteIndex || image[0] !== 0 || image[1] !== 0 || image[2] !== 0) {
-      visit(j, distanceA, image, dxA, dyA, dzA);
-    }
+  const { positionsA, fractional, heightsA, binsPerAxis, start } = grid;
+  const query: Query = {
+    siteIndex,
+    radiusA,
+    xA: positionsA[3 * siteIndex]!,
+    yA: positionsA[3 * siteIndex + 1]!,
+    zA: positionsA[3 * siteIndex + 2]!,
   };
-  for (let x = home[0]! - span[0]!; x <= home[0]! + span[0]!; x += 1) {
+  const [nx, ny, nz] = binsPerAxis;
+  // Bins whose planes come within the radius: exact, since f · height is the distance from a face.
+  const range = (axis: 0 | 1 | 2) => {
+    const at = fractional[3 * siteIndex + axis]!;
+    const reach = (radiusA / heightsA[axis]) * (1 + 1e-12);
+    return [
+      Math.floor((at - reach) * binsPerAxis[axis]),
+      Math.floor((at + reach) * binsPerAxis[axis]),
+    ] as const;
+  };
+  const [[fromX, toX], [fromY, toY], [fromZ, toZ]] = [range(0), range(1), range(2)];
+  for (let x = fromX; x <= toX; x += 1) {
     const ix = Math.floor(x / nx);
-    for (let y = home[1]! - span[1]!; y <= home[1]! + span[1]!; y += 1) {
+    for (let y = fromY; y <= toY; y += 1) {
       const iy = Math.floor(y / ny);
-      for (let z = home[2]! - span[2]!; z <= home[2]! + span[2]!; z += 1) {
+      const column = ((x - ix * nx) * ny + (y - iy * ny)) * nz;
+      for (let z = fromZ; z <= toZ; z += 1) {
         const iz = Math.floor(z / nz);
-        const bin = ((x - ix * nx) * ny + (y - iy * ny)) * nz + (z - iz * nz);
-        visitBin(grid, bin, [ix, iy, iz], centreA, radiusA, withoutSelf);
+        const bin = column + z - iz * nz;
+        if (start[bin]! < start[bin + 1]!) {
+          visitBin(grid, bin, [ix, iy, iz], query, visit);
+        }
       }
     }
   }

@@ -55,46 +55,58 @@ function gridOf(cell: ResolvedCell, radiusA: number): NeighbourGrid {
   return buildNeighbourGrid(cell.vectorsA, fractional, radiusA);
 }
 
-/**
- * One site of each set of symmetry copies, with the number of copies: neighbours need to be looked
- * up once per set, since copies see the same surroundings.
- */
-function representatives(cell: ResolvedCell): { site: number; multiplicity: number }[] {
-  const byRow = new Map<number, { site: number; multiplicity: number }>();
-  cell.sites.forEach(({ definitionIndex, copy }, site) => {
-    const known = byRow.get(definitionIndex);
-    if (known === undefined) {
-      byRow.set(definitionIndex, { site, multiplicity: 1 });
-    } else {
-      known.multiplicity += 1;
-      if (copy === 0) {
-        known.site = site;
-      }
-    }
-  });
-  return [...byRow.values()];
+/** Adds a group to one of nearly the same distance. */
+function mergeInto(group: PairGroup, entry: PairGroup): void {
+  const pairs = group.pairsPerCell + entry.pairsPerCell;
+  const weighted = group.distanceA * group.pairsPerCell + entry.distanceA * entry.pairsPerCell;
+  group.distanceA = weighted / pairs;
+  group.pairsPerCell = pairs;
 }
 
-/** Merges neighbouring distances of a sorted list into groups no wider than the grouping. */
+/** Decimals of Å that tell rows apart: three, more where the grouping is finer. */
+function decimalsFor(groupingA: number): number {
+  return Math.min(12, Math.max(3, Math.ceil(-Math.log10(groupingA) - 1e-9)));
+}
+
+/**
+ * Merges neighbouring distances of a sorted list into groups no wider than the grouping, and groups
+ * whose mean distances read the same, so that no two rows have one name.
+ */
 function groupDistances(sorted: readonly PairGroup[], groupingA: number): PairGroup[] {
   const groups: PairGroup[] = [];
   let startA = -Infinity;
   for (const entry of sorted) {
     const last = groups.at(-1);
     if (last !== undefined && entry.distanceA - startA <= groupingA) {
-      const pairs = last.pairsPerCell + entry.pairsPerCell;
-      const weighted = last.distanceA * last.pairsPerCell + entry.distanceA * entry.pairsPerCell;
-      last.distanceA = weighted / pairs;
-      last.pairsPerCell = pairs;
+      mergeInto(last, entry);
     } else {
       groups.push({ ...entry });
       startA = entry.distanceA;
     }
   }
-  return groups;
+  const decimals = decimalsFor(groupingA);
+  const named: PairGroup[] = [];
+  for (const group of groups) {
+    const last = named.at(-1);
+    if (last?.distanceA.toFixed(decimals) === group.distanceA.toFixed(decimals)) {
+      mergeInto(last, group);
+    } else {
+      named.push(group);
+    }
+  }
+  return named;
 }
 
-/** All pairs within a radius, by kind and distance; each pair is counted once. */
+/** Of a lattice translation and its opposite, one. */
+function isFirstOfTwo([x, y, z]: readonly [number, number, number]): boolean {
+  return x > 0 || (x === 0 && (y > 0 || (y === 0 && z > 0)));
+}
+
+/**
+ * All pairs of charged sites within a radius, by kind and distance; each pair is counted once. Looks
+ * at every site of the cell: copies made by operations need not see the same surroundings, for
+ * nothing forces the operations a person lists to be a group.
+ */
 function collectPairs(
   cell: ResolvedCell,
   species: SpeciesOfCell,
@@ -102,33 +114,42 @@ function collectPairs(
   groupingA: number,
 ): PairGroup[] {
   const grid = gridOf(cell, radiusA);
-  const kinds = species.keys.length;
-  const found = new Map<number, PairGroup[]>();
-  for (const { site, multiplicity } of representatives(cell)) {
-    const a = species.indexOfSite[site]!;
-    const shells = new Map<number, PairGroup>();
-    forEachNeighbour(grid, site, radiusA, (j, distanceA) => {
-      const b = species.indexOfSite[j]!;
+  const { chargesE, indexOfSite } = species;
+  const kinds = chargesE.length;
+  const shells = new Map<number, PairGroup>();
+  for (let i = 0; i < indexOfSite.length; i += 1) {
+    const own = indexOfSite[i]!;
+    if (chargesE[own] === 0) {
+      continue;
+    }
+    forEachNeighbour(grid, i, radiusA, (j, distanceA, image) => {
+      const other = indexOfSite[j]!;
+      if (j < i || chargesE[other] === 0 || (j === i && !isFirstOfTwo(image))) {
+        return;
+      }
+      const a = Math.min(own, other);
+      const b = Math.max(own, other);
       // Rounded only to find equal distances quickly; the distances themselves are kept.
-      const key = Math.round(distanceA * 1e7) * kinds + b;
+      const key = (Math.round(distanceA * 1e6) * kinds + a) * kinds + b;
       const shell = shells.get(key);
       if (shell === undefined) {
-        shells.set(key, {
-          a: Math.min(a, b),
-          b: Math.max(a, b),
-          distanceA,
-          pairsPerCell: multiplicity / 2,
-        });
+        shells.set(key, { a, b, distanceA, pairsPerCell: 1 });
       } else {
-        shell.pairsPerCell += multiplicity / 2;
+        shell.pairsPerCell += 1;
       }
     });
-    for (const shell of shells.values()) {
-      const kind = shell.a * kinds + shell.b;
-      found.set(kind, [...(found.get(kind) ?? []), shell]);
+  }
+  const byKind = new Map<number, PairGroup[]>();
+  for (const shell of shells.values()) {
+    const kind = shell.a * kinds + shell.b;
+    const list = byKind.get(kind);
+    if (list === undefined) {
+      byKind.set(kind, [shell]);
+    } else {
+      list.push(shell);
     }
   }
-  return [...found.values()].flatMap((list) =>
+  return [...byKind.values()].flatMap((list) =>
     groupDistances(
       list.sort((p, q) => p.distanceA - q.distanceA),
       groupingA,
@@ -148,9 +169,8 @@ export function shortestUnlike(
   for (let radiusA = 1.2 * roomA; ; radiusA *= 1.6) {
     const grid = gridOf(cell, radiusA);
     let best: { distanceA: number; siteA: number; siteB: number } | null = null;
-    for (const { site } of representatives(cell)) {
-      const charge = cell.sites[site]!.chargeE;
-      if (charge <= 0) {
+    for (let site = 0; site < cell.sites.length; site += 1) {
+      if (cell.sites[site]!.chargeE <= 0) {
         continue;
       }
       forEachNeighbour(grid, site, radiusA, (j, distanceA) => {
@@ -165,25 +185,35 @@ export function shortestUnlike(
   }
 }
 
-/** The distance at or just above 3 d₀ (or three times the room of a site) that completes a shell. */
+/**
+ * The reach a ledger has unless told otherwise, Å: the smallest R ≥ 3 d₀ that completes a shell, or
+ * three times the room of a site where all ions have one sign.
+ */
 export function defaultReachA(cell: ResolvedCell): number {
   const unlike = shortestUnlike(cell);
   const startA = 3 * (unlike?.distanceA ?? Math.cbrt(cell.volumeA3 / cell.sites.length));
   const species = speciesOfCell(cell);
+  if (species.chargesE.every((chargeE) => chargeE === 0)) {
+    return startA;
+  }
   for (let radiusA = 1.15 * startA; ; radiusA *= 1.3) {
+    // 3 d₀ itself is a shell of many lattices: rounding must not push it out.
     const beyond = collectPairs(cell, species, radiusA, defaultGroupingA)
       .map(({ distanceA }) => distanceA)
-      .filter((distanceA) => distanceA >= startA - defaultGroupingA);
+      .filter((distanceA) => distanceA >= startA * (1 - 1e-9) - defaultGroupingA / 2);
     if (beyond.length > 0) {
-      return Math.min(...beyond);
+      return beyond.reduce((least, distanceA) => Math.min(least, distanceA));
     }
   }
 }
 
 /** Name of a row that annotations and addresses use: `Mg+2|O-2|2.106`. */
-function rowKey(speciesA: string, speciesB: string, distanceA: number): string {
-  return `${speciesA}|${speciesB}|${distanceA.toFixed(3)}`;
+function rowKey(speciesA: string, speciesB: string, distance: string): string {
+  return `${speciesA}|${speciesB}|${distance}`;
 }
+
+/** Distance for sorting: rounding must not decide which of two kinds at one distance comes first. */
+const sortingDistance = ({ distanceA }: PairGroup) => Math.round(distanceA * 1e6);
 
 /**
  * The pair ledger: energy by ion-pair kinds out to a reach R, closed by what lies beyond.
@@ -209,12 +239,10 @@ export function buildPairLedger(
     ? (-COULOMB_EV_ANGSTROM * cell.sites.reduce((sum, { chargeE }) => sum + chargeE ** 2, 0)) /
       (2 * reachA * formulaUnitsPerCell)
     : 0;
-  const groups = collectPairs(cell, species, reachA + groupingA / 2, groupingA)
-    .filter(({ a, b }) => species.chargesE[a] !== 0 && species.chargesE[b] !== 0)
-    .sort((p, q) => {
-      const apart = p.distanceA - q.distanceA;
-      return Math.abs(apart) > groupingA ? apart : p.a - q.a || p.b - q.b || apart;
-    });
+  const groups = collectPairs(cell, species, reachA + groupingA / 2, groupingA).sort(
+    (p, q) => sortingDistance(p) - sortingDistance(q) || p.a - q.a || p.b - q.b,
+  );
+  const decimals = decimalsFor(groupingA);
   let runningEv = 0;
   const rows: PairLedgerRow[] = groups.map(({ a, b, distanceA, pairsPerCell }) => {
     const pairEnergyEv =
@@ -224,9 +252,8 @@ export function buildPairLedger(
     const contributionEv = pairsPerFormulaUnit * pairEnergyEv * weight;
     runningEv += contributionEv;
     const [speciesA, speciesB] = [species.keys[a]!, species.keys[b]!];
-    const key = rowKey(speciesA, speciesB, distanceA);
     return {
-      key,
+      key: rowKey(speciesA, speciesB, distanceA.toFixed(decimals)),
       speciesA,
       speciesB,
       distanceA,

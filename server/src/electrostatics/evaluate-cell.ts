@@ -1,7 +1,7 @@
 import { composition } from '#common/physics/composition';
-import { chargeSumE, shortestContacts } from '#common/physics/cell-summary';
+import { chargeSumE } from '#common/physics/cell-summary';
 import {
-  buildPairLedger,
+  defaultGroupingA,
   shortestUnlike,
   speciesOfCell,
   type SpeciesOfCell,
@@ -14,7 +14,9 @@ import { GRAM_PER_MOL_CUBIC_ANGSTROM_IN_GRAM_PER_CM3 } from '#common/units/const
 import { engineVersion, evaluateElectrostatics } from './engine/index.js';
 import { madelungConstants } from './results/madelung.js';
 import { refuseCoincident, refuseUnfit } from './results/refusals.js';
-import { rowsWithShells, siteTable } from './results/site-table.js';
+import { resultLedger } from './results/result-ledger.js';
+import { copySpreadV, rowsWithShells, siteTable } from './results/site-table.js';
+import { sublatticesOf, type Sublattices } from './results/sublattices.js';
 import { warningsFor } from './results/warnings.js';
 
 /** The space group a result names; null where the cell gives bare operations. */
@@ -36,16 +38,75 @@ function listSpecies(cell: ResolvedCell, species: SpeciesOfCell, units: number):
   });
 }
 
-function sumCell(cell: ResolvedCell, species: SpeciesOfCell, method: EvaluationMethod) {
+function sumCell(cell: ResolvedCell, sublattices: Sublattices, method: EvaluationMethod) {
   return evaluateElectrostatics({
     vectorsA: cell.vectorsA,
     fractional: Float64Array.from(cell.sites.flatMap(({ fractional }) => [...fractional])),
     chargesE: Float64Array.from(cell.sites, ({ chargeE }) => chargeE),
-    speciesIndex: species.indexOfSite,
-    speciesCount: species.keys.length,
+    speciesIndex: sublattices.indexOfSite,
+    speciesCount: sublattices.keys.length,
     toleranceRelative: method.toleranceRelative,
     uniformBackground: method.uniformBackground,
   });
+}
+
+type EngineSums = ReturnType<typeof sumCell>;
+
+/** Energies with bounds, and the four Madelung constants that follow from them. */
+function energies(
+  cell: ResolvedCell,
+  sums: EngineSums,
+  species: readonly Species[],
+  units: number,
+): Pick<
+  EvaluationResult,
+  | 'shortestUnlikeDistanceA'
+  | 'shortestUnlikePair'
+  | 'energyEvPerCell'
+  | 'energyEvPerFormulaUnit'
+  | 'relativeErrorBound'
+  | 'madelung'
+> {
+  const unlike = shortestUnlike(cell);
+  const { energyEv, energyBoundEv } = sums;
+  const perUnit = { value: energyEv / units, bound: energyBoundEv / units };
+  return {
+    shortestUnlikeDistanceA: unlike?.distanceA ?? null,
+    shortestUnlikePair: unlike && [
+      cell.sites[unlike.siteA]!.label,
+      cell.sites[unlike.siteB]!.label,
+    ],
+    energyEvPerCell: { value: energyEv, bound: energyBoundEv },
+    energyEvPerFormulaUnit: perUnit,
+    relativeErrorBound: energyEv === 0 ? 1 : energyBoundEv / Math.abs(energyEv),
+    madelung: madelungConstants({
+      energyEv: perUnit.value,
+      energyBoundEv: perUnit.bound,
+      shortestUnlikeA: unlike?.distanceA ?? null,
+      firstEdgeA: cell.lattice.aA,
+      ions: species
+        .filter(({ charge }) => charge !== 0)
+        .map(({ charge, perFormulaUnit }) => ({ chargeE: charge, perFormulaUnit })),
+    }),
+  };
+}
+
+function densityGPerCm3(cell: ResolvedCell, massGPerMolPerCell: number): number | null {
+  const density =
+    (massGPerMolPerCell / cell.volumeA3) * GRAM_PER_MOL_CUBIC_ANGSTROM_IN_GRAM_PER_CM3;
+  return Number.isFinite(density) ? density : null;
+}
+
+/** Energies of the sublattice matrix per formula unit, and the certificate, as plain data. */
+function matrixAndCertificate(sums: EngineSums, sublattices: Sublattices, units: number) {
+  return {
+    sublatticeMatrix: {
+      speciesKeys: [...sublattices.keys],
+      energiesEv: sums.speciesMatrixEv.map((row) => row.map((value) => value / units)),
+      boundEv: sums.speciesMatrixBoundEv / units,
+    },
+    certificate: { ...sums.certificate, splittingPerA: [...sums.certificate.splittingPerA] },
+  };
 }
 
 /**
@@ -62,18 +123,14 @@ export function evaluateCell(
   spaceGroup: SpaceGroupName,
 ): EvaluationResult {
   refuseUnfit(cell, method);
-  refuseCoincident(cell, shortestContacts(cell, 1)[0]);
+  refuseCoincident(cell);
   const { formula, formulaUnitsPerCell: units, massGPerMol } = composition(cell);
-  const species = speciesOfCell(cell);
-  const sums = sumCell(cell, species, method);
-  const energyEv = sums.energyEv / units;
-  const energyBoundEv = sums.energyBoundEv / units;
-  const speciesList = listSpecies(cell, species, units);
-  const unlike = shortestUnlike(cell);
-  const ledger = buildPairLedger(cell, energyEv, units);
+  const kinds = speciesOfCell(cell);
+  const sublattices = sublatticesOf(kinds);
+  const sums = sumCell(cell, sublattices, method);
+  const species = listSpecies(cell, kinds, units);
+  const { ledger, groupingA } = resultLedger(cell, sums.energyEv / units, units);
   const sites = siteTable(cell, sums, ledger.reachA);
-  const density =
-    ((massGPerMol * units) / cell.volumeA3) * GRAM_PER_MOL_CUBIC_ANGSTROM_IN_GRAM_PER_CM3;
   return {
     engine: engineVersion,
     method,
@@ -81,44 +138,27 @@ export function evaluateCell(
     formulaUnitsPerCell: units,
     sitesPerCell: cell.sites.length,
     volumeA3: cell.volumeA3,
-    densityGPerCm3: Number.isFinite(density) ? density : null,
-    ...spaceGroup,
+    densityGPerCm3: densityGPerCm3(cell, massGPerMol * units),
+    spaceGroupNumber: spaceGroup.spaceGroupNumber,
+    spaceGroupSymbol: spaceGroup.spaceGroupSymbol,
     shortestDistanceA: sums.shortestDistanceA,
-    shortestUnlikeDistanceA: unlike?.distanceA ?? null,
-    shortestUnlikePair: unlike && [
-      cell.sites[unlike.siteA]!.label,
-      cell.sites[unlike.siteB]!.label,
-    ],
-    energyEvPerCell: { value: sums.energyEv, bound: sums.energyBoundEv },
-    energyEvPerFormulaUnit: { value: energyEv, bound: energyBoundEv },
-    relativeErrorBound: sums.energyBoundEv / Math.abs(sums.energyEv),
-    madelung: madelungConstants({
-      energyEv,
-      energyBoundEv,
-      shortestUnlikeA: unlike?.distanceA ?? null,
-      firstEdgeA: cell.lattice.aA,
-      ions: speciesList
-        .filter(({ charge }) => charge !== 0)
-        .map(({ charge, perFormulaUnit }) => ({ chargeE: charge, perFormulaUnit })),
-    }),
+    ...energies(cell, sums, species, units),
     potentialBoundV: sums.potentialBoundV,
-    species: speciesList,
+    species,
     sites,
     stressEvPerA3: [...sums.stressEvPerA3],
     stressBoundEvPerA3: sums.stressBoundEvPerA3,
     pairLedger: ledger,
-    sublatticeMatrix: {
-      speciesKeys: [...species.keys],
-      energiesEv: sums.speciesMatrixEv.map((row) => row.map((value) => value / units)),
-      boundEv: sums.speciesMatrixBoundEv / units,
-    },
-    certificate: { ...sums.certificate, splittingPerA: [...sums.certificate.splittingPerA] },
+    ...matrixAndCertificate(sums, sublattices, units),
     hasPolarAxis: cell.hasPolarAxis,
     warnings: warningsFor(cell, method, {
       shortestDistanceA: sums.shortestDistanceA,
       chargeSumE: chargeSumE(cell),
       agrees: sums.certificate.agrees,
       shellsLeftOut: Math.max(0, sites.length - rowsWithShells),
+      widerGroupingA: groupingA > defaultGroupingA ? groupingA : null,
+      areSublatticesMerged: sublattices.areMerged,
+      copySpreadV: copySpreadV(cell, sums.potentialsV),
     }),
   };
 }

@@ -43,6 +43,11 @@ class RealSpaceSum implements RealSpaceSums {
   /** Sums of the site at hand over one species: φ, field, strain derivative. */
   private readonly own = new Float64Array(10);
 
+  /** Of each hit: erfc(ηr)/r, and g(r). */
+  private screened = new Float64Array(0);
+
+  private slope = new Float64Array(0);
+
   constructor(
     private readonly cell: PreparedCell,
     private readonly plan: SplittingPlan,
@@ -83,7 +88,13 @@ class RealSpaceSum implements RealSpaceSums {
         continue;
       }
       this.terms += hits;
-      this.sumHits(i, hits);
+      if (this.screened.length < hits) {
+        this.screened = new Float64Array(near.hitSite.length);
+        this.slope = new Float64Array(near.hitSite.length);
+      }
+      this.evaluateKernels(i, hits);
+      this.sumOwn(hits);
+      this.giveToOthers(i, hits);
       this.bySpecies.add(s < t ? s * kinds + t : t * kinds + s, qi * own[0]!);
       this.potentials.add(i, own[0]!);
       for (let axis = 0; axis < 3; axis += 1) {
@@ -95,19 +106,39 @@ class RealSpaceSum implements RealSpaceSums {
     }
   }
 
-  /** The innermost loop: kernels of the selected candidates, booked for both ions of each pair. */
-  private sumHits(i: number, hits: number): void {
-    const { own, fields } = this;
-    const { sums, lost } = this.potentials;
-    const { hitSite, hitX, hitY, hitZ, hitSquare } = this.near;
-    const charges = this.cell.charges;
-    const qi = charges[i]!;
+  /** erfc(ηr)/r and g(r) of every hit, from the table: interval, then distance from its centre. */
+  private evaluateKernels(i: number, hits: number): void {
+    const { near, screened, slope } = this;
+    const { hitSquare, closeSquare } = near;
     const eta = this.plan.splittingPerA;
-    const closeSquare = this.near.closeSquare;
     const gaussianFactor = twoOverSqrtPi * eta;
+    let shortest = this.shortestSquare;
+    for (let hit = 0; hit < hits; hit += 1) {
+      if (hitSquare[hit]! < closeSquare) {
+        near.refine(i, hit);
+      }
+      const square = hitSquare[hit]!;
+      shortest = square < shortest ? square : shortest;
+      const r = Math.sqrt(square);
+      const inverse = 1 / r;
+      const x = eta * r;
+      const interval = (x * intervalsPerUnit) | 0;
+      const t = x - (interval + 0.5) / intervalsPerUnit;
+      const base = interval * intervalStride;
+      const value = polynomialAt(erfcTable, base, t) * inverse;
+      const gaussian = gaussianFactor * polynomialAt(erfcTable, base + 8, t);
+      screened[hit] = value;
+      slope[hit] = (value + gaussian) * inverse * inverse;
+    }
+    this.shortestSquare = shortest;
+  }
+
+  /** Field and strain derivative of the site at hand; plain sums, for they are not shown so far. */
+  private sumOwn(hits: number): void {
+    const { own, slope } = this;
+    const { hitSite, hitX, hitY, hitZ } = this.near;
+    const { charges } = this.cell;
     // One variable each: an array would cost more than the arithmetic.
-    let phi = 0;
-    let phiLost = 0;
     let ex = 0;
     let ey = 0;
     let ez = 0;
@@ -117,35 +148,11 @@ class RealSpaceSum implements RealSpaceSums {
     let yz = 0;
     let xz = 0;
     let xy = 0;
-    let shortest = this.shortestSquare;
     for (let hit = 0; hit < hits; hit += 1) {
-      if (hitSquare[hit]! < closeSquare) {
-        this.near.refine(i, hit);
-      }
-      const square = hitSquare[hit]!;
-      shortest = square < shortest ? square : shortest;
-      const r = Math.sqrt(square);
-      // erfc and the Gaussian from their table: interval, then distance from its centre.
-      const x = eta * r;
-      const interval = (x * intervalsPerUnit) | 0;
-      const t = x - (interval + 0.5) / intervalsPerUnit;
-      const base = interval * intervalStride;
-      const inverse = 1 / r;
-      const screened = polynomialAt(erfcTable, base, t) * inverse;
-      const gaussian = gaussianFactor * polynomialAt(erfcTable, base + 8, t);
-      const slope = (screened + gaussian) * inverse * inverse;
-      const j = hitSite[hit]!;
-      const qj = charges[j]!;
+      const pull = charges[hitSite[hit]!]! * slope[hit]!;
       const dx = hitX[hit]!;
       const dy = hitY[hit]!;
       const dz = hitZ[hit]!;
-      // This ion: potential with its rounding errors kept, field and strain derivative plainly.
-      const term = qj * screened;
-      const next = phi + term;
-      const taken = next - phi;
-      phiLost += phi - (next - taken) + (term - taken);
-      phi = next;
-      const pull = qj * slope;
       const px = pull * dx;
       const py = pull * dy;
       const pz = pull * dz;
@@ -158,19 +165,7 @@ class RealSpaceSum implements RealSpaceSums {
       yz -= py * dz;
       xz -= px * dz;
       xy -= px * dy;
-      // The other ion: it sees the vector reversed.
-      const before = sums[j]!;
-      const after = before + qi * screened;
-      const gained = after - before;
-      lost[j]! += before - (after - gained) + (qi * screened - gained);
-      sums[j] = after;
-      const push = qi * slope;
-      fields[3 * j]! += push * dx;
-      fields[3 * j + 1]! += push * dy;
-      fields[3 * j + 2]! += push * dz;
     }
-    this.shortestSquare = shortest;
-    own[0] = phi + phiLost;
     own[1] = ex;
     own[2] = ey;
     own[3] = ez;
@@ -180,6 +175,37 @@ class RealSpaceSum implements RealSpaceSums {
     own[7] = yz;
     own[8] = xz;
     own[9] = xy;
+  }
+
+  /** Potential of the site at hand and what the other ions get of it: they see vectors reversed. */
+  private giveToOthers(i: number, hits: number): void {
+    const { own, fields, screened, slope } = this;
+    const { sums, lost } = this.potentials;
+    const { hitSite, hitX, hitY, hitZ } = this.near;
+    const { charges } = this.cell;
+    const qi = charges[i]!;
+    let phi = 0;
+    let phiLost = 0;
+    for (let hit = 0; hit < hits; hit += 1) {
+      const j = hitSite[hit]!;
+      // Two sums with their rounding errors kept, as in the accumulator.
+      const term = charges[j]! * screened[hit]!;
+      const next = phi + term;
+      const taken = next - phi;
+      phiLost += phi - (next - taken) + (term - taken);
+      phi = next;
+      const given = qi * screened[hit]!;
+      const before = sums[j]!;
+      const after = before + given;
+      const gained = after - before;
+      lost[j]! += before - (after - gained) + (given - gained);
+      sums[j] = after;
+      const push = qi * slope[hit]!;
+      fields[3 * j]! += push * hitX[hit]!;
+      fields[3 * j + 1]! += push * hitY[hit]!;
+      fields[3 * j + 2]! += push * hitZ[hit]!;
+    }
+    own[0] = phi + phiLost;
   }
 }
 

@@ -1,9 +1,16 @@
 import { Problem, type FieldProblem } from '#common/errors/problem';
 import { chargeSumE } from '#common/physics/cell-summary';
+import { buildNeighbourGrid, forEachNeighbour } from '#common/physics/neighbours';
 import type { ResolvedCell } from '#common/physics/resolved-cell';
 import { cellLimits, type EvaluationMethod } from '#common/schemas/cell';
 
+/** Rows of the site table named as ways to balance a charged cell. */
 const rowsNamed = 6;
+
+/** Charges a row may have. */
+const largestChargeE = 9;
+
+/** Closer than this, two sites are one place. */
 const closestAllowedA = 1e-3;
 
 /** A charge as read: +2, −0.5. */
@@ -30,13 +37,21 @@ function neutralisingRows(cell: ResolvedCell, excess: number): FieldProblem[] {
       known.parts += 1;
     }
   }
-  return [...rows].slice(0, rowsNamed).map(([index, { label, charge, weight, parts }]) => ({
-    code: 'cell.not_neutral',
-    field: `sites.${index}.charge`,
-    message:
-      `The cell has an excess of ${signed(excess)}. ${label} (${parts} in the cell) at ` +
-      `${signed(charge - excess / weight)} instead of ${signed(charge)} would balance it.`,
+  const options = [...rows].map(([index, row]) => ({
+    index,
+    ...row,
+    balanced: row.charge - excess / row.weight,
   }));
+  const possible = options.filter(({ balanced }) => Math.abs(balanced) <= largestChargeE);
+  return (possible.length > 0 ? possible : options)
+    .slice(0, rowsNamed)
+    .map(({ index, label, charge, parts, balanced }) => ({
+      code: 'cell.not_neutral',
+      field: `sites.${index}.charge`,
+      message:
+        `The cell has an excess of ${signed(excess)}. ${label} (${parts} in the cell) at ` +
+        `${signed(balanced)} instead of ${signed(charge)} would balance it.`,
+    }));
 }
 
 function refuse(code: 'cell.no_sites' | 'cell.no_charges' | 'cell.too_many_sites', text: string) {
@@ -71,21 +86,42 @@ export function refuseUnfit(cell: ResolvedCell, method: EvaluationMethod): void 
   }
 }
 
+/** The two sites that lie closest together, if closer than a limit. */
+function closestWithin(
+  cell: ResolvedCell,
+  limitA: number,
+): { siteA: number; siteB: number; distanceA: number } | null {
+  const fractional = Float64Array.from(cell.sites.flatMap((site) => [...site.fractional]));
+  const grid = buildNeighbourGrid(cell.vectorsA, fractional, limitA);
+  let closest: { siteA: number; siteB: number; distanceA: number } | null = null;
+  for (let siteA = 0; siteA < cell.sites.length; siteA += 1) {
+    forEachNeighbour(grid, siteA, limitA, (siteB, distanceA) => {
+      if (siteA <= siteB && (closest === null || distanceA < closest.distanceA)) {
+        closest = { siteA, siteB, distanceA };
+      }
+    });
+  }
+  return closest;
+}
+
 /**
  * Refuses a cell in which two sites all but coincide.
- * @throws Problem `cell.coincident_sites`
+ * @throws Problem `cell.coincident_sites`, the field being the later row of the two
  */
-export function refuseCoincident(
-  cell: ResolvedCell,
-  contact: { labelA: string; labelB: string; distanceA: number } | undefined,
-): void {
-  if (contact === undefined || contact.distanceA > closestAllowedA) {
+export function refuseCoincident(cell: ResolvedCell): void {
+  const closest = closestWithin(cell, closestAllowedA);
+  if (closest === null) {
     return;
   }
-  const { labelA, labelB, distanceA } = contact;
-  const index = cell.sites.find(({ label }) => label === labelB)?.definitionIndex ?? 0;
-  const message = `${labelB} lies on ${labelA} (${distanceA.toExponential(1)} Å apart): move or remove one.`;
+  const [first, second] = [cell.sites[closest.siteA]!, cell.sites[closest.siteB]!];
+  const later = first.definitionIndex > second.definitionIndex ? first : second;
+  const other = later === first ? second : first;
+  const message =
+    later.definitionIndex === other.definitionIndex
+      ? `Two copies of ${later.label} lie on one place: put it exactly on the symmetry element, or off it.`
+      : `${later.label} lies on ${other.label} (${closest.distanceA.toExponential(1)} Å apart): move or remove one.`;
+  const field = `sites.${later.definitionIndex}.x`;
   throw new Problem('cell.coincident_sites', message, {
-    fields: [{ code: 'cell.coincident_sites', field: `sites.${index}.x`, message }],
+    fields: [{ code: 'cell.coincident_sites', field, message }],
   });
 }

@@ -12,6 +12,25 @@ export interface SiteSums {
   readonly forcesEvPerA: Float64Array;
 }
 
+/**
+ * The largest difference between the potentials of two copies of one row, V. Copies made by a space
+ * group see the same surroundings; those of operations that are no group need not.
+ */
+export function copySpreadV(cell: ResolvedCell, potentialsV: Float64Array): number {
+  const range = new Map<number, { least: number; most: number }>();
+  cell.sites.forEach(({ definitionIndex }, index) => {
+    const value = potentialsV[index]!;
+    const known = range.get(definitionIndex);
+    if (known === undefined) {
+      range.set(definitionIndex, { least: value, most: value });
+    } else {
+      known.least = Math.min(known.least, value);
+      known.most = Math.max(known.most, value);
+    }
+  });
+  return [...range.values()].reduce((most, row) => Math.max(most, row.most - row.least), 0);
+}
+
 /** One row per place of the definition: its first copy, and how many copies there are. */
 export function siteTable(cell: ResolvedCell, sums: SiteSums, reachA: number): SiteResult[] {
   const copies = new Map<number, { index: number; multiplicity: number }>();
