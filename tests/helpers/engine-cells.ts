@@ -1,4 +1,4 @@
-import type { EngineInput } from '../../server/src/electrostatics/engine/contract.js';
+import type { EngineInput } from '#server/electrostatics/engine/contract';
 import type { ReferenceLattice } from '../fixtures/madelung/lattices.js';
 
 /** Numbers in [0, 1) that are the same in every run: a linear congruential generator. */

@@ -182,7 +182,7 @@ describe('a conventional cell and its primitive cell', () => {
 
 describe('charged cells', () => {
   const base = inputOf(
-    referenceLattices().find(({ name }) => name === 'wigner_bcc_ocp')!,
+    referenceLattices().find(({ name }) => name === 'wigner_bcc_ocp'),
     1e-13,
   );
 
