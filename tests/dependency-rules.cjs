@@ -61,7 +61,6 @@ module.exports = {
     },
   ],
   options: {
-    tsConfig: { fileName: 'server/tsconfig.json' },
     tsPreCompilationDeps: true,
     doNotFollow: { path: 'node_modules' },
     exclude: { path: '(^|/)(node_modules|dist)/' },

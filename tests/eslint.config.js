@@ -79,10 +79,6 @@ export default tseslint.config(
     },
   },
   {
-    files: ['common/**/*.test.ts'],
-    rules: { 'no-restricted-imports': forbid(...never, noServer, noClient) },
-  },
-  {
     files: ['server/src/**/*.ts'],
     rules: {
       'no-restricted-imports': forbid(...never, noClient),
@@ -160,6 +156,10 @@ export default tseslint.config(
       '@typescript-eslint/no-unsafe-return': 'off',
       '@typescript-eslint/no-unsafe-call': 'off',
     },
+  },
+  {
+    files: ['**/*.test.{ts,tsx}', 'tests/**/*.ts'],
+    rules: { 'no-restricted-imports': forbid(never[1]) },
   },
   {
     files: ['server/src/command-line/**', 'server/src/main.ts', 'tests/bench/**/*.ts'],

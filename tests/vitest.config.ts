@@ -8,7 +8,7 @@ const conditions = ['holdfast'];
 const base = {
   root,
   resolve: { conditions: ['holdfast', 'module', 'browser', 'development|production'] },
-  ssr: { resolve: { conditions: [...conditions, 'node', 'module', 'import', 'default'] } },
+  ssr: { resolve: { conditions: [...conditions, 'node', 'module'] } },
 };
 
 export default defineConfig({

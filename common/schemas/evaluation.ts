@@ -116,7 +116,6 @@ export const certificate = z.object({
   /** True when every residual lies within the bound it is allowed. */
   agrees: z.boolean(),
 });
-export type Certificate = z.infer<typeof certificate>;
 
 export const warning = z.object({ code: z.string(), message: z.string() });
 export type Warning = z.infer<typeof warning>;

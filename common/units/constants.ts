@@ -9,9 +9,6 @@ export const COULOMB_EV_ANGSTROM = 14.399645469;
 /** Relative standard uncertainty of k_e, which is that of ε₀ (CODATA 2022). */
 export const COULOMB_RELATIVE_UNCERTAINTY = 1.6e-10;
 
-/** 1 eV per particle in kJ mol⁻¹: e·N_A / 1000 (exact SI, here to 13 digits). */
-export const EV_IN_KJ_PER_MOL = 96.48533212331;
-
 /** 1 eV Å⁻³ in GPa: e × 10²¹ (exact SI). */
 export const EV_PER_CUBIC_ANGSTROM_IN_GPA = 160.2176634;
 

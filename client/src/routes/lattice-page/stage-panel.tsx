@@ -13,7 +13,8 @@ import { useTheme } from '#client/lib/theme.ts';
 import { speciesRadiusA } from '#client/routes/lattice-page/ion-radii.ts';
 import { useStageSettings } from '#client/routes/lattice-page/stage-settings.ts';
 import { parseIonId } from '#client/scene/model/ion-id.ts';
-import { LatticeViewer, type LatticeViewerProps } from '#client/scene/viewer.tsx';
+import type { LatticeViewerProps } from '#client/scene/viewer-props.ts';
+import { LatticeViewer } from '#client/scene/viewer.tsx';
 
 interface StagePanelProps {
   cell: ResolvedCell;

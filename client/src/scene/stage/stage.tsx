@@ -2,7 +2,7 @@ import { useCallback, useId, useRef, useState, type JSX, type ReactNode } from '
 
 import { pickIon } from '../model/pick.ts';
 import { viewPose } from '../model/scene-view.ts';
-import type { LatticeViewerProps } from '../viewer.tsx';
+import type { LatticeViewerProps } from '../viewer-props.ts';
 import { detectRenderer, type RendererKind } from './detect-renderer.ts';
 import { EdgeLettersLayer } from './edge-letters-layer.tsx';
 import type { StageFrames } from './frames.ts';

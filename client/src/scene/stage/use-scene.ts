@@ -10,7 +10,7 @@ import {
   paletteOf,
   type BlockModel,
 } from '../model/scene-model.ts';
-import type { LatticeViewerProps } from '../viewer.tsx';
+import type { LatticeViewerProps } from '../viewer-props.ts';
 
 /** Everything drawn, each part rebuilt only when its own inputs change. */
 export function useScene(props: LatticeViewerProps) {

@@ -26,6 +26,7 @@ const shapes: readonly [string, number[]][] = [
   ['needle 1 : 20', vectorsFrom([3, 3, 60], [90, 90, 90])],
   ['plate 20 : 1', vectorsFrom([40, 40, 2], [90, 90, 120])],
   ['triclinic', vectorsFrom([6, 8, 11], [75, 104, 116])],
+  ['turned every way', [6, 1, 2, -1, 7, 1.5, 2, -1, 8]],
   ['left-handed', [0, 7, 0, 8, 0, 0, 1, 2, 9]],
 ];
 
@@ -182,7 +183,7 @@ describe('a conventional cell and its primitive cell', () => {
 
 describe('charged cells', () => {
   const base = inputOf(
-    referenceLattices().find(({ name }) => name === 'wigner_bcc_ocp'),
+    referenceLattices().find(({ name }) => name === 'wigner_bcc_ocp')!,
     1e-13,
   );
 
@@ -225,6 +226,31 @@ describe('ions very close together', () => {
       8 * Number.EPSILON * Math.abs(expected) + (10 * k * distanceA ** 4) / lengthA ** 5,
     );
   });
+});
+
+describe('ions very close together over a corner of the cell', () => {
+  it.each([false, true])(
+    'keep the digits that their coordinates have (swapped: %s)',
+    (isSwapped) => {
+      const [near, far] = [3e-9, 1 - 5e-9];
+      const lengthA = 10;
+      // 1 − far is exact, near + that is rounded once: the distance is known to the last digit.
+      const distanceA = lengthA * Math.sqrt(3) * (near + (1 - far));
+      const places = isSwapped ? [far, near] : [near, far];
+      const result = evaluateElectrostatics({
+        vectorsA: [lengthA, 0, 0, 0, lengthA, 0, 0, 0, lengthA],
+        fractional: Float64Array.from(places.flatMap((place) => [place, place, place])),
+        chargesE: Float64Array.from([1, -1]),
+        speciesIndex: Int32Array.from([0, 1]),
+        speciesCount: 2,
+        toleranceRelative: 1e-13,
+      });
+      const expected = -k / distanceA;
+      expect(Math.abs(result.energyEv - expected)).toBeLessThanOrEqual(
+        8 * Number.EPSILON * Math.abs(expected),
+      );
+    },
+  );
 });
 
 describe('refusals', () => {
