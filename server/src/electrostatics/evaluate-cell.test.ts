@@ -1,12 +1,10 @@
 import { describe, expect, it } from 'vitest';
 
 import { Problem } from '#common/errors/problem';
-import { resolveCell } from '#common/physics/resolve-cell';
 import type { ResolvedCell } from '#common/physics/resolved-cell';
 import { defaultEvaluationMethod, type EvaluationMethod } from '#common/schemas/cell';
 import { evaluationResult, type EvaluationResult } from '#common/schemas/evaluation';
 import { COULOMB_EV_ANGSTROM as k } from '#common/units/constants';
-import { parseOperation } from '#common/physics/symmetry-operation';
 import { seededNumbers } from '#tests/helpers/engine-cells';
 import { cubicCell, fluoriteCell, resolvedCell, rockSaltCell } from '#tests/helpers/resolved-cells';
 
@@ -205,19 +203,15 @@ describe('warnings', () => {
   });
 
   it('of operations that do not map the cell onto itself', () => {
-    const site = { charge: '1', occupancy: '1' };
-    const definition = {
-      lattice: { a: '4', b: '5', c: '7', alpha: '90', beta: '90', gamma: '90' },
-      symmetry: { kind: 'operations' as const, operations: ['x,y,z', 'z,x,y'] },
-      parameters: [],
-      sites: [
-        { ...site, label: 'Na1', element: 'Na', x: '0.1', y: '0.2', z: '0.35' },
-        { ...site, label: 'Cl1', element: 'Cl', charge: '-1', x: '0.6', y: '0.5', z: '0.8' },
-      ],
-    };
-    const operations = definition.symmetry.operations.map(parseOperation);
-    const { cell } = resolveCell(definition, { operations, setting: null });
-    const result = evaluate(cell!);
+    // Two copies of each row by z,x,y, which is no symmetry of a cell with three different edges.
+    const lattice = { aA: 4, bA: 5, cA: 7, alphaDeg: 90, betaDeg: 90, gammaDeg: 90 };
+    const cell = resolvedCell(lattice, [
+      { element: 'Na', chargeE: 1, at: [0.1, 0.2, 0.35], row: 0 },
+      { element: 'Na', chargeE: 1, at: [0.35, 0.1, 0.2], row: 0 },
+      { element: 'Cl', chargeE: -1, at: [0.6, 0.5, 0.8], row: 1 },
+      { element: 'Cl', chargeE: -1, at: [0.8, 0.6, 0.5], row: 1 },
+    ]);
+    const result = evaluate(cell);
     expect(codes(result)).toContain('evaluation.copies_differ');
     const { rows, beyondEv, totalEv } = result.pairLedger;
     expect(Math.abs(rows.at(-1)!.runningEv + beyondEv - totalEv)).toBeLessThan(1e-12);

@@ -8,6 +8,7 @@ import { evaluateElectrostatics } from './index.js';
 const cells: readonly [string, EngineInput][] = [
   ['displaced rock salt', displacedRockSalt(1, 1e-14)],
   ['a triclinic cell', randomCell(vectorsFrom([6, 8, 11], [75, 104, 116]), 8, 1e-14, 11)],
+  ['a cell turned every way', randomCell([6, 1, 2, -1, 7, 1.5, 2, -1, 8], 8, 1e-14, 12)],
   [
     'a charged cell in a uniform background',
     {

@@ -19,7 +19,7 @@ const unevenness = 4;
 const sqrtPi = Math.sqrt(Math.PI);
 
 /** s with erfc(s) = target, by bisection. */
-export function reachFor(target: number): number {
+function reachFor(target: number): number {
   let [low, high] = [0.5, 8.9];
   for (let step = 0; step < 40; step += 1) {
     const middle = (low + high) / 2;

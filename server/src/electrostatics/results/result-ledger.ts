@@ -3,7 +3,7 @@ import type { ResolvedCell } from '#common/physics/resolved-cell';
 import type { PairLedger } from '#common/schemas/evaluation';
 
 /** A disordered cell has a row for each pair of its own; beyond this many, distances are lumped. */
-export const mostLedgerRows = 4000;
+const mostLedgerRows = 4000;
 
 const widestGroupingA = 1;
 

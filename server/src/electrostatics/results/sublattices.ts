@@ -1,7 +1,7 @@
 import type { SpeciesOfCell } from '#common/physics/pair-ledger';
 
 /** More ion kinds than this make a matrix nobody reads, and one that costs more than the sums. */
-export const mostSublattices = 32;
+const mostSublattices = 32;
 
 /** Classes of sites for the sublattice matrix. */
 export interface Sublattices {

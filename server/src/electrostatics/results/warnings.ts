@@ -9,7 +9,7 @@ const closeContactA = 0.8;
 const noticeableSpreadV = 0.05;
 
 /** What the warnings follow from, beside the cell and the method. */
-export interface ResultFacts {
+interface ResultFacts {
   readonly shortestDistanceA: number;
   readonly chargeSumE: number;
   readonly agrees: boolean;
