@@ -64,6 +64,8 @@ export class Candidates {
 
   hitSquare = new Float64Array(0);
 
+  private hitAt = new Int32Array(0);
+
   private readonly positionsA: Float64Array;
 
   private readonly rankOf: Int32Array;
@@ -170,6 +172,7 @@ export class Candidates {
       sorted.set(at, site, found.rank[k]!, found.x[k]!, found.y[k]!, found.z[k]!);
     }
     if (this.hitSite.length < count) {
+      this.hitAt = new Int32Array(sorted.site.length);
       this.hitSite = new Int32Array(sorted.site.length);
       this.hitX = new Float64Array(sorted.site.length);
       this.hitY = new Float64Array(sorted.site.length);
@@ -184,26 +187,41 @@ export class Candidates {
    * @returns how many there are
    */
   select(i: number, t: number): number {
-    const { site, rank, x, y, z } = this.sorted;
-    const { hitSite, hitX, hitY, hitZ, hitSquare, positionsA } = this;
+    const { rank, x, y, z } = this.sorted;
+    const { hitAt, positionsA } = this;
     const cutoffSquare = this.cutoffA * this.cutoffA;
     const own = this.rankOf[i]!;
-    const [xi, yi, zi] = [positionsA[3 * i]!, positionsA[3 * i + 1]!, positionsA[3 * i + 2]!];
+    const xi = positionsA[3 * i]!;
+    const yi = positionsA[3 * i + 1]!;
+    const zi = positionsA[3 * i + 2]!;
     const end = this.speciesStart[t + 1]!;
     let hits = 0;
     for (let k = this.speciesStart[t]!; k < end; k += 1) {
       const dx = x[k]! - xi;
       const dy = y[k]! - yi;
       const dz = z[k]! - zi;
-      const square = dx * dx + dy * dy + dz * dz;
-      hitSite[hits] = site[k]!;
-      hitX[hits] = dx;
-      hitY[hits] = dy;
-      hitZ[hits] = dz;
-      hitSquare[hits] = square;
-      hits += (square <= cutoffSquare ? 1 : 0) & (rank[k]! > own ? 1 : 0);
+      hitAt[hits] = k;
+      hits += (dx * dx + dy * dy + dz * dz <= cutoffSquare ? 1 : 0) & (rank[k]! > own ? 1 : 0);
     }
+    this.fillHits(hits, xi, yi, zi);
     return hits;
+  }
+
+  /** Sites and vectors of the candidates that {@link select} marked. */
+  private fillHits(hits: number, xi: number, yi: number, zi: number): void {
+    const { site, x, y, z } = this.sorted;
+    const { hitAt, hitSite, hitX, hitY, hitZ, hitSquare } = this;
+    for (let hit = 0; hit < hits; hit += 1) {
+      const k = hitAt[hit]!;
+      const dx = x[k]! - xi;
+      const dy = y[k]! - yi;
+      const dz = z[k]! - zi;
+      hitSite[hit] = site[k]!;
+      hitX[hit] = dx;
+      hitY[hit] = dy;
+      hitZ[hit] = dz;
+      hitSquare[hit] = dx * dx + dy * dy + dz * dz;
+    }
   }
 
   /** Below this, positions have lost digits of the distance: see {@link refine}. */
