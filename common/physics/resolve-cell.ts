@@ -1,6 +1,11 @@
 import { findElement } from '#common/chemistry/elements';
 import type { FieldProblem } from '#common/errors/problem';
-import { evaluateExpression, evaluateParameters } from '#common/expressions/evaluate-expression';
+import {
+  evaluateExpression,
+  evaluateParameters,
+  type ParameterValues,
+} from '#common/expressions/evaluate-expression';
+import { findMetricFault, groupFault } from '#common/physics/operation-checks';
 import { resolveLattice } from '#common/physics/resolve-lattice';
 import { resolveSites, type SiteNumbers } from '#common/physics/resolve-sites';
 import type { ResolvedCell } from '#common/physics/resolved-cell';
@@ -13,19 +18,17 @@ export interface CellSymmetryData {
   readonly setting: SpaceGroupSetting | null;
 }
 
-type Parameters = Readonly<Record<string, number>>;
-
 const largestChargeE = 9;
 
 /** Reads one number of a site row; null and a problem where it can't be read or is out of range. */
 function readNumber(
   text: string,
   field: string,
-  parameters: Parameters,
+  parameters: ParameterValues,
   problems: FieldProblem[],
   check: (value: number) => { code: string; message: string } | null,
 ): number | null {
-  const result = evaluateExpression(text, parameters);
+  const result = evaluateExpression(text, parameters.values, parameters.broken);
   if (!result.ok) {
     problems.push({ code: 'cell.expression', field, message: result.message });
     return null;
@@ -57,24 +60,27 @@ const checkOccupancy = (value: number) =>
     ? null
     : { code: 'cell.occupancy', message: 'Write an occupancy above 0 and at most 1.' };
 
-function labelProblem(sites: readonly CellSite[], index: number): string | null {
-  const label = sites[index]!.label.trim();
+/** What is wrong with a label; remembers it as taken. */
+function labelProblem(label: string, taken: Set<string>): string | null {
   if (label === '') {
     return 'Give the site a label, such as Mg1.';
   }
-  const isTaken = sites.findIndex((site) => site.label.trim() === label) !== index;
-  return isTaken ? `There are two sites called ${label}: rename one.` : null;
+  if (taken.has(label)) {
+    return `There are two sites called ${label}: rename one.`;
+  }
+  taken.add(label);
+  return null;
 }
 
 function readSite(
-  sites: readonly CellSite[],
+  site: CellSite,
   index: number,
-  parameters: Parameters,
+  takenLabels: Set<string>,
+  parameters: ParameterValues,
   problems: FieldProblem[],
 ): SiteNumbers | null {
-  const site = sites[index]!;
   const at = (name: keyof CellSite) => `sites.${index}.${name}`;
-  const label = labelProblem(sites, index);
+  const label = labelProblem(site.label.trim(), takenLabels);
   if (label !== null) {
     problems.push({ code: 'cell.label', field: at('label'), message: label });
   }
@@ -120,6 +126,24 @@ function leavesPolarAxis(operations: readonly SymmetryOperation[]): boolean {
   return sum.some((entry) => entry !== 0);
 }
 
+/** Faults of operations that are no tabulated setting, which the tables vouch for. */
+function symmetryProblems(
+  { operations, setting }: CellSymmetryData,
+  vectorsA: readonly number[] | null,
+): FieldProblem[] {
+  if (setting !== null) {
+    return [];
+  }
+  const fault = groupFault(operations);
+  if (fault !== null) {
+    return [{ code: 'cell.operation', field: 'symmetry', message: fault }];
+  }
+  const misfit = vectorsA === null ? null : findMetricFault(operations, vectorsA);
+  return misfit === null
+    ? []
+    : [{ code: 'cell.system_constraint', field: 'symmetry', message: misfit }];
+}
+
 /**
  * Turns a cell as typed into numbers: parameters and expressions evaluated, lattice checked,
  * symmetry applied, shared places merged.
@@ -133,7 +157,8 @@ export function resolveCell(
   definition: CellDefinition,
   symmetry: CellSymmetryData,
 ): { cell: ResolvedCell | null; problems: FieldProblem[] } {
-  const { values: parameters, problems } = evaluateParameters(definition.parameters);
+  const parameters = evaluateParameters(definition.parameters);
+  const problems = [...parameters.problems];
   const lattice = resolveLattice(definition.lattice, parameters, symmetry.setting);
   if (Array.isArray(lattice)) {
     problems.push(...lattice);
@@ -142,8 +167,10 @@ export function resolveCell(
     const message = 'Add at least one site: an element, its charge and where it is.';
     problems.push({ code: 'cell.no_sites', field: 'sites', message });
   }
+  problems.push(...symmetryProblems(symmetry, Array.isArray(lattice) ? null : lattice.vectorsA));
+  const takenLabels = new Set<string>();
   const rows = definition.sites
-    .map((_, index) => readSite(definition.sites, index, parameters, problems))
+    .map((site, index) => readSite(site, index, takenLabels, parameters, problems))
     .filter((row) => row !== null);
   if (Array.isArray(lattice) || problems.length > 0) {
     return { cell: null, problems };
@@ -157,7 +184,7 @@ export function resolveCell(
     sites: resolved.sites,
     operationCount: symmetry.operations.length,
     hasPolarAxis: leavesPolarAxis(symmetry.operations),
-    parameters,
+    parameters: parameters.values,
   };
   return { cell, problems: [] };
 }

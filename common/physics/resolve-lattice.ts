@@ -1,5 +1,5 @@
 import type { FieldProblem } from '#common/errors/problem';
-import { evaluateExpression } from '#common/expressions/evaluate-expression';
+import { evaluateExpression, type ParameterValues } from '#common/expressions/evaluate-expression';
 import { cellVectors, cellVolumeA3 } from '#common/physics/cell-metric';
 import { latticeConstraints, latticeParameterNames } from '#common/physics/crystal-system';
 import type { LatticeParameters } from '#common/physics/resolved-cell';
@@ -23,13 +23,13 @@ type Values = Partial<Record<LatticeParameterName, number>>;
 
 function readValues(
   texts: LatticeParameterTexts,
-  parameters: Readonly<Record<string, number>>,
+  parameters: Pick<ParameterValues, 'values' | 'broken'>,
   problems: FieldProblem[],
 ): Values {
   const values: Values = {};
   for (const name of latticeParameterNames) {
     const field = `lattice.${name}`;
-    const result = evaluateExpression(texts[name], parameters);
+    const result = evaluateExpression(texts[name], parameters.values, parameters.broken);
     if (!result.ok) {
       problems.push({ code: 'cell.expression', field, message: result.message });
     } else if (edges.includes(name) && !(result.value > 0 && result.value < 1e9)) {
@@ -91,7 +91,7 @@ function checkAngles(lattice: LatticeParameters, problems: FieldProblem[]): void
 /** The lattice parameters in numbers with the cell vectors, or the problems field by field. */
 export function resolveLattice(
   texts: LatticeParameterTexts,
-  parameters: Readonly<Record<string, number>>,
+  parameters: Pick<ParameterValues, 'values' | 'broken'>,
   setting: SpaceGroupSetting | null,
 ): { lattice: LatticeParameters; vectorsA: number[]; volumeA3: number } | FieldProblem[] {
   const problems: FieldProblem[] = [];

@@ -1,24 +1,21 @@
 import type { FieldProblem } from '#common/errors/problem';
-import { fractionalToCartesian } from '#common/physics/cell-metric';
+import { expandPosition } from '#common/physics/expand-position';
+import { crowdedA, placeMetric, PlaceIndex, samePlaceA } from '#common/physics/place-index';
 import type { ResolvedSite, SiteComponent } from '#common/physics/resolved-cell';
-import { applyOperation } from '#common/physics/symmetry-operation';
 import { cellLimits } from '#common/schemas/cell';
 import type { SymmetryOperation } from '#common/schemas/symmetry';
 
-/** Positions closer than this are one place: rounding of special positions, mixed rows. */
-export const samePlaceA = 0.01;
+type Triple = readonly [number, number, number];
 
 /** A row of the site table in numbers. */
 export interface SiteNumbers {
   readonly definitionIndex: number;
   readonly label: string;
   readonly component: SiteComponent;
-  readonly fractional: readonly [number, number, number];
+  readonly fractional: Triple;
 }
 
-type Triple = [number, number, number];
-
-/** A place that one or more rows fill. */
+/** The places that one or more rows fill. */
 interface Orbit {
   readonly first: SiteNumbers;
   readonly components: SiteComponent[];
@@ -26,133 +23,70 @@ interface Orbit {
   readonly places: readonly Triple[];
 }
 
-function wrap(value: number): number {
-  // Rounding must not put 1/3 + 2/3 just below 1: that is the cell's own corner.
-  const wrapped = value - Math.floor(value + 1e-12);
-  return Math.abs(wrapped) < 1e-12 ? 0 : wrapped;
+function coincidence(row: SiteNumbers, message: string): FieldProblem {
+  return { code: 'cell.coincident_sites', field: `sites.${row.definitionIndex}.x`, message };
 }
 
-function nearestImage(from: readonly number[], to: readonly number[]): Triple {
-  return [0, 1, 2].map((k) => {
-    const difference = to[k]! - from[k]!;
-    return difference - Math.round(difference);
-  }) as Triple;
-}
-
-function distanceA(vectors: readonly number[], a: readonly number[], b: readonly number[]) {
-  return Math.hypot(...fractionalToCartesian(vectors, nearestImage(a, b)));
-}
-
-/** The mean of copies that fell on one place, so that a rounded special position becomes exact. */
-function centreOf(members: readonly Triple[]): Triple {
-  const origin = members[0]!;
-  const shift = members
-    .map((member) => nearestImage(origin, member))
-    .reduce((sum, d) => [sum[0] + d[0], sum[1] + d[1], sum[2] + d[2]] as Triple, [0, 0, 0]);
-  const isExact = shift.every((component) => Math.abs(component) < 1e-9);
-  return isExact
-    ? origin
-    : ([0, 1, 2].map((k) => wrap(origin[k]! + shift[k]! / members.length)) as Triple);
-}
-
-/** The symmetry copies of one position, copies on the same place merged. */
-export function expandPosition(
-  fractional: readonly number[],
-  operations: readonly SymmetryOperation[],
-  vectors: readonly number[],
-): Triple[] {
-  const clusters: Triple[][] = [[fractional.map(wrap) as Triple]];
-  for (const operation of operations) {
-    const copy = applyOperation(operation, fractional).map(wrap) as Triple;
-    const home = clusters.find((members) => distanceA(vectors, members[0]!, copy) < samePlaceA);
-    if (home === undefined) {
-      clusters.push([copy]);
-    } else {
-      home.push(copy);
-    }
-  }
-  return clusters.map(centreOf);
-}
-
-/** Looks up places by position, over the cell's faces. */
-class PlaceIndex {
-  private readonly orbits = new Map<string, { orbit: Orbit; place: Triple }[]>();
-
-  private readonly bins: Triple;
-
-  constructor(private readonly vectors: readonly number[]) {
-    this.bins = [0, 1, 2].map((k) => {
-      const edge = Math.hypot(vectors[3 * k]!, vectors[3 * k + 1]!, vectors[3 * k + 2]!);
-      return Math.max(1, Math.min(64, Math.floor(edge / 0.5)));
-    }) as Triple;
-  }
-
-  private key(x: number, y: number, z: number): string {
-    const [nx, ny, nz] = this.bins;
-    return `${(x + nx) % nx},${(y + ny) % ny},${(z + nz) % nz}`;
-  }
-
-  private binOf(place: Triple): Triple {
-    return place.map((value, k) => Math.floor(value * this.bins[k]!)) as Triple;
-  }
-
-  add(orbit: Orbit): void {
-    for (const place of orbit.places) {
-      const [x, y, z] = this.binOf(place);
-      const key = this.key(x, y, z);
-      const entries = this.orbits.get(key);
-      if (entries === undefined) {
-        this.orbits.set(key, [{ orbit, place }]);
-      } else {
-        entries.push({ orbit, place });
-      }
-    }
-  }
-
-  /** The orbit that has a place within reach of this one. */
-  find(place: Triple): { orbit: Orbit; distanceA: number } | null {
-    const [x, y, z] = this.binOf(place);
-    for (let dx = -1; dx <= 1; dx += 1) {
-      for (let dy = -1; dy <= 1; dy += 1) {
-        for (let dz = -1; dz <= 1; dz += 1) {
-          for (const entry of this.orbits.get(this.key(x + dx, y + dy, z + dz)) ?? []) {
-            const distance = distanceA(this.vectors, entry.place, place);
-            if (distance < samePlaceA) {
-              return { orbit: entry.orbit, distanceA: distance };
-            }
-          }
-        }
-      }
-    }
-    return null;
-  }
-}
-
-/** A row that falls on a place already taken: shares it if both are partly filled, else a problem. */
-function share(orbit: Orbit, row: SiteNumbers, distance: number, problems: FieldProblem[]): void {
+/** What forbids a row to share the places of rows before it, or null if it may. */
+function sharingProblem(
+  orbit: Orbit,
+  row: SiteNumbers,
+  copies: number,
+  distanceA: number,
+): FieldProblem | null {
   const isShared = row.component.occupancy < 1 && orbit.components[0]!.occupancy < 1;
   if (!isShared) {
-    problems.push({
-      code: 'cell.coincident_sites',
-      field: `sites.${row.definitionIndex}.x`,
-      message:
-        `${row.label} lies on ${orbit.labels[0]} (${distance.toFixed(3)} Å apart): move it, ` +
+    return coincidence(
+      row,
+      `${row.label} lies on ${orbit.labels[0]} (${distanceA.toFixed(3)} Å apart): move it, ` +
         'remove it, or give both an occupancy below 1.',
-    });
-    return;
+    );
   }
-  orbit.components.push(row.component);
-  orbit.labels.push(row.label);
-  const sum = orbit.components.reduce((total, { occupancy }) => total + occupancy, 0);
+  if (copies !== orbit.places.length) {
+    return coincidence(
+      row,
+      `${row.label} shares the place of ${orbit.labels[0]} but has ${copies} copies in the cell, ` +
+        `not ${orbit.places.length}: give both the same coordinates.`,
+    );
+  }
+  const occupied = [...orbit.components, row.component].map(({ occupancy }) => occupancy);
+  const sum = occupied.reduce((total, occupancy) => total + occupancy, 0);
   if (sum > 1 + 1e-6) {
-    problems.push({
+    return {
       code: 'cell.occupancy',
       field: `sites.${row.definitionIndex}.occupancy`,
       message:
-        `${orbit.labels.join(', ')} share one place and add up to ${Number(sum.toFixed(6))}: ` +
-        'lower an occupancy so that the sum is at most 1.',
-    });
+        `${[...orbit.labels, row.label].join(', ')} share one place and add up to ` +
+        `${Number(sum.toFixed(6))}: lower an occupancy so that the sum is at most 1.`,
+    };
   }
+  return null;
+}
+
+/** Whole ions that all but coincide, with another row or with their own copies. */
+function crowdingProblem(
+  row: SiteNumbers,
+  other: { readonly what: Orbit; readonly distanceA: number } | null,
+  crowdingA: number,
+): FieldProblem | null {
+  if (row.component.occupancy < 1) {
+    return null;
+  }
+  if (other !== null && other.what.components[0]!.occupancy === 1) {
+    return coincidence(
+      row,
+      `${row.label} lies ${other.distanceA.toFixed(3)} Å from ${other.what.labels[0]}, less than ` +
+        `${crowdedA} Å: move it or remove one of the two.`,
+    );
+  }
+  if (crowdingA < Infinity) {
+    return coincidence(
+      row,
+      `${row.label} lies ${crowdingA.toFixed(3)} Å from its own symmetry copy: put it on the ` +
+        'special position between them, or move it away.',
+    );
+  }
+  return null;
 }
 
 /** `Mg+2`, `O-2`, `Xe0`, `Ti+3.5`. */
@@ -162,7 +96,7 @@ function ionKey({ element, chargeE }: SiteComponent): string {
 }
 
 /** Name of the ion kind on a place: one full ion, or its parts with their occupancies. */
-export function speciesKeyOf(components: readonly SiteComponent[]): string {
+function speciesKeyOf(components: readonly SiteComponent[]): string {
   const [only] = components;
   if (components.length === 1 && only!.occupancy === 1) {
     return ionKey(only!);
@@ -189,35 +123,46 @@ function sitesOf(orbit: Orbit): ResolvedSite[] {
 /**
  * Every place in the cell from the rows of the site table: symmetry applied, copies on the same
  * place merged, rows that share a place merged to one mean-field site.
+ *
+ * @param vectorsA rows a, b, c in Å
  */
 export function resolveSites(
   rows: readonly SiteNumbers[],
   operations: readonly SymmetryOperation[],
-  vectors: readonly number[],
+  vectorsA: readonly number[],
 ): { sites: ResolvedSite[]; problems: FieldProblem[] } {
   const problems: FieldProblem[] = [];
-  const index = new PlaceIndex(vectors);
+  const metric = placeMetric(vectorsA);
+  const index = new PlaceIndex<Orbit>(metric);
   const orbits: Orbit[] = [];
   let count = 0;
   for (const row of rows) {
-    const places = expandPosition(row.fractional, operations, vectors);
-    const taken = index.find(places[0]!);
-    if (taken !== null) {
-      share(taken.orbit, row, taken.distanceA, problems);
+    const { places, crowdingA } = expandPosition(row.fractional, operations, metric);
+    const near = index.nearest(places[0]!);
+    if (near !== null && near.distanceA < samePlaceA) {
+      const orbit = near.what;
+      const problem = sharingProblem(orbit, row, places.length, near.distanceA);
+      if (problem === null) {
+        orbit.components.push(row.component);
+        orbit.labels.push(row.label);
+      } else {
+        problems.push(problem);
+      }
       continue;
     }
-    const orbit = { first: row, components: [row.component], labels: [row.label], places };
+    const problem = crowdingProblem(row, near, crowdingA);
+    if (problem !== null) {
+      problems.push(problem);
+    }
     count += places.length;
     if (count > cellLimits.expandedSites) {
-      problems.push({
-        code: 'cell.too_many_sites',
-        field: 'sites',
-        message: `The cell has more than ${cellLimits.expandedSites} sites: use a smaller cell.`,
-      });
+      const message = `The cell has more than ${cellLimits.expandedSites} sites: use a smaller cell.`;
+      problems.push({ code: 'cell.too_many_sites', field: 'sites', message });
       break;
     }
+    const orbit = { first: row, components: [row.component], labels: [row.label], places };
     orbits.push(orbit);
-    index.add(orbit);
+    places.forEach((place) => index.add(place, orbit));
   }
   return { sites: orbits.flatMap(sitesOf), problems };
 }
