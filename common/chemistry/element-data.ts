@@ -1,7 +1,7 @@
 /**
  * Elements: atomic number, symbol, name, standard atomic mass in g mol⁻¹.
  * Source: Blue Obelisk Data Repository, elements.xml, as in Debian's package bodr (MIT licence);
- * symbols of elements 115, 117 and 118 as named by IUPAC in 2016. Masses marked * are mass numbers
+ * symbols of elements 113, 115, 117 and 118 as named by IUPAC in 2016. Masses marked * are mass numbers
  * of a long-lived isotope (no standard mass exists).
  */
 export const elementData = `
@@ -33,6 +33,6 @@ export const elementData = `
 99 Es Einsteinium 252*; 100 Fm Fermium 257*; 101 Md Mendelevium 258*; 102 No Nobelium 259*;
 103 Lr Lawrencium 262*; 104 Rf Rutherfordium 267*; 105 Db Dubnium 270*; 106 Sg Seaborgium 271*;
 107 Bh Bohrium 270*; 108 Hs Hassium 277*; 109 Mt Meitnerium 276*; 110 Ds Darmstadtium 281*;
-111 Rg Roentgenium 282*; 112 Cn Copernicium 285*; 113 Uut Ununtrium 285*; 114 Fl Flerovium 289*;
+111 Rg Roentgenium 282*; 112 Cn Copernicium 285*; 113 Nh Nihonium 285*; 114 Fl Flerovium 289*;
 115 Mc Moscovium 289*; 116 Lv Livermorium 293*; 117 Ts Tennessine 294*; 118 Og Oganesson 294*
 `;

@@ -21,7 +21,10 @@ export interface IonicRadius {
 
 const shannon = 'Shannon (1976) Acta Cryst. A32, 751';
 
-/** A coordination as tabulated: `6`, `6.highspin`, `4.squareplanar`; `4SQ`-like suffixes don't occur. */
+/** Spin state of the d electrons. */
+export type SpinState = 'high' | 'low';
+
+/** A coordination as tabulated: `6`, `6.highspin`, `4.squareplanar`. */
 function readEntry(element: string, charge: number, text: string): IonicRadiusRow {
   const [place, radius] = text.split('=') as [string, string];
   const [coordination, state = ''] = place.split('.') as [string, string?];
@@ -53,20 +56,31 @@ for (const row of ionicRadii) {
   byIon.set(key, [...(byIon.get(key) ?? []), row]);
 }
 
-/** High spin is the usual state in ionic solids; a plain entry comes before a special geometry. */
-const stateRank = (state: string) => ['', 'highspin', 'lowspin'].indexOf(state) >>> 0;
+/**
+ * How far a row is from what is wanted: first the spin state, where it is given and tabulated, then
+ * plain entries, then high spin (the usual state in ionic solids), then low spin, then odd geometries.
+ */
+function stateRank(state: string, spin: SpinState | undefined): number {
+  if (spin !== undefined && state === `${spin}spin`) {
+    return -1;
+  }
+  const rank = ['', 'highspin', 'lowspin'].indexOf(state);
+  return rank < 0 ? 3 : rank;
+}
 
 /**
  * Effective ionic radius of an ion in Å.
  *
  * @param coordination wanted coordination number (6 when left out); where the table has none for it,
- *   the nearest tabulated one is taken, and the answer says which
+ *   the nearest tabulated one is taken (the lower of two equally near), and the answer says which
+ * @param spin wanted spin state; high where the table tells them apart and none is given
  * @returns null for an ion the table doesn't have
  */
 export function ionicRadiusA(
   element: string,
   charge: number,
   coordination = 6,
+  spin?: SpinState,
 ): IonicRadius | null {
   const rows = byIon.get(`${element}${charge}`);
   if (rows === undefined) {
@@ -75,7 +89,7 @@ export function ionicRadiusA(
   const [best] = [...rows].sort(
     (a, b) =>
       Math.abs(a.coordination - coordination) - Math.abs(b.coordination - coordination) ||
-      stateRank(a.state) - stateRank(b.state),
+      stateRank(a.state, spin) - stateRank(b.state, spin),
   );
   return { radiusA: best!.radiusA, coordination: best!.coordination, source: shannon };
 }
@@ -83,26 +97,37 @@ export function ionicRadiusA(
 /** Radius drawn for an ion the table doesn't have; a drawing aid, no physical claim. */
 const untabulatedRadiusA = 1.0;
 
-/**
- * Radius to draw an ion with: tabulated for this charge, else for the nearest tabulated charge of
- * the element with the same sign, else 1.0 Å; `source` says which.
- */
-export function displayRadiusA(
-  element: string,
-  charge: number,
-): { radiusA: number; source: string } {
-  const exact = ionicRadiusA(element, charge);
-  if (exact !== null) {
-    return exact;
-  }
-  const [near] = ionicRadii
+/** Least radius drawn: bare protons and the like are tabulated with about zero or less. */
+const leastDrawnA = 0.2;
+
+/** The tabulated row for the nearest charge of the same sign, in a coordination near 6. */
+function nearestCharge(element: string, charge: number): IonicRadiusRow | undefined {
+  const [nearest] = ionicRadii
     .filter((row) => row.element === element && Math.sign(row.charge) === Math.sign(charge))
     .sort(
       (a, b) =>
         Math.abs(a.charge - charge) - Math.abs(b.charge - charge) ||
         Math.abs(a.coordination - 6) - Math.abs(b.coordination - 6),
     );
-  return near === undefined
-    ? { radiusA: untabulatedRadiusA, source: 'no tabulated radius: drawn as 1.0 Å' }
-    : { radiusA: near.radiusA, source: `${shannon}, for charge ${near.charge}` };
+  return nearest;
+}
+
+/**
+ * Radius to draw an ion with: tabulated for this charge, else for the nearest tabulated charge of
+ * the element with the same sign, else 1.0 Å; at least 0.2 Å. `source` says which.
+ */
+export function displayRadiusA(
+  element: string,
+  charge: number,
+): { radiusA: number; source: string } {
+  const exact = ionicRadiusA(element, charge);
+  const near = exact === null ? nearestCharge(element, charge) : undefined;
+  const found = exact ?? near;
+  if (found === undefined) {
+    return { radiusA: untabulatedRadiusA, source: 'no tabulated radius: 1.0 Å drawn' };
+  }
+  const source = near === undefined ? shannon : `${shannon}, for charge ${near.charge}`;
+  return found.radiusA < leastDrawnA
+    ? { radiusA: leastDrawnA, source: `${source}: ${found.radiusA} Å, drawn as 0.2 Å` }
+    : { radiusA: found.radiusA, source };
 }
