@@ -37,13 +37,13 @@ describe('the table of ionic radii', () => {
     }
   });
 
-  it('is consistent: cations are 0.14 Å larger as crystal radii, anions smaller', () => {
-    for (const row of published) {
-      expect(row.crystalRadiusA - row.radiusA, nameOf(row)).toBeCloseTo(
-        Math.sign(row.charge) * 0.14,
-        6,
-      );
-    }
+  it('has crystal radii 0.14 Å larger for cations, smaller for anions, in all rows but one', () => {
+    const odd = published.filter(
+      ({ charge, radiusA, crystalRadiusA }) =>
+        Math.abs(crystalRadiusA - radiusA - Math.sign(charge) * 0.14) > 1e-9,
+    );
+    // The published row itself differs by 0.148 Å.
+    expect(odd.map(nameOf)).toEqual(['N 5 3 ']);
   });
 
   it('names elements only, and hydroxide', () => {
