@@ -36,7 +36,7 @@ async function findings(browser: Browser): Promise<string[]> {
 }
 
 describe.each(['light', 'dark'] as const)('every page in %s', (colorScheme) => {
-  it('gives axe nothing to find', async () => {
+  it('gives axe nothing to find', { timeout: 420_000 }, async () => {
     const browser = await openBrowser('none', { colorScheme });
     try {
       const page = browser.context.pages()[0] ?? (await browser.context.newPage());

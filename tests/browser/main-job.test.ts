@@ -92,6 +92,7 @@ describe.each<Graphics>(['none', 'webgl'])('the main job with graphics: %s', (gr
     await page.getByRole('dialog').getByRole('textbox').fill('Measured edge');
     await page.getByRole('dialog').getByRole('button', { name: /Save/ }).click();
     await page.getByRole('button', { name: 'Submit for review' }).click();
+    await page.getByRole('dialog').getByRole('button', { name: 'Submit' }).click();
     await page.getByText('In review').first().waitFor();
     const address = new URL(page.url());
 

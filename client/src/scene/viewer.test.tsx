@@ -4,7 +4,8 @@ import { beforeEach, describe, expect, it, vi } from 'vitest';
 
 import { periclase, periclaseRadiusA } from './model/test-cells.ts';
 import type { Repeat } from './model/block.ts';
-import { LatticeViewer, type LatticeViewerProps } from './viewer.tsx';
+import type { LatticeViewerProps } from './viewer-props.ts';
+import { LatticeViewer } from './viewer.tsx';
 
 const describeIon = (id: string): { title: string; detail: string } => ({
   title: periclase.sites[Number(id.split('.')[0])]!.label,
