@@ -40,7 +40,7 @@ const withSite =
 /** Many sites of one kind at places of their own in a cell without symmetry. */
 const crowd: Change = (cell) => ({
   ...cell,
-  lattice: { ...cell.lattice, a: '400', b: '400', c: '400' },
+  lattice: { ...cell.lattice, a: '4000', b: '4000', c: '4000' },
   sites: Array.from({ length: 400 }, (_, i) => ({
     ...cell.sites[i % 2]!,
     label: `S${i}`,

@@ -28,7 +28,7 @@ export function serveClient(app: NestExpressApplication, folder: string): void {
     new Logger('Client').warn('The client is not built; only the API is served.');
     return;
   }
-  app.useStaticAssets(folder, { index: false, setHeaders: setCaching });
+  app.useStaticAssets(folder, { index: false, redirect: false, setHeaders: setCaching });
   app.use((request: Request, response: Response, next: NextFunction) => {
     if (!isPage(request)) {
       next();
