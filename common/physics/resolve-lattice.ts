@@ -19,6 +19,9 @@ const edges: readonly LatticeParameterName[] = ['a', 'b', 'c'];
 /** How far a typed parameter may stray from what symmetry asks, relative. */
 const constraintTolerance = 1e-6;
 
+/** Volume of the flattest cell taken, relative to a·b·c. */
+const leastVolume = 1e-4;
+
 type Values = Partial<Record<LatticeParameterName, number>>;
 
 function readValues(
@@ -114,8 +117,7 @@ export function resolveLattice(
   }
   const vectorsA = cellVectors(lattice);
   const volumeA3 = cellVolumeA3(vectorsA);
-  // A flat cell passes the angle test by rounding only.
-  if (!(volumeA3 > 1e-6 * lattice.aA * lattice.bA * lattice.cA)) {
+  if (!(volumeA3 > leastVolume * lattice.aA * lattice.bA * lattice.cA)) {
     const message = 'The cell is flat, it has no volume: change an angle.';
     return [{ code: 'cell.zero_volume', field: 'lattice.alpha', message }];
   }
