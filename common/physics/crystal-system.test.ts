@@ -2,10 +2,10 @@ import { describe, expect, it } from 'vitest';
 
 import { applyLatticeConstraints, latticeConstraints } from '#common/physics/crystal-system';
 import type { LatticeParameterTexts } from '#common/schemas/cell';
-import type { CrystalSystem, SpaceGroupSetting } from '#common/schemas/symmetry';
+import type { SpaceGroupSetting } from '#common/schemas/symmetry';
 
 function setting(
-  crystalSystem: CrystalSystem,
+  crystalSystem: SpaceGroupSetting['crystalSystem'],
   given: Partial<SpaceGroupSetting> = {},
 ): SpaceGroupSetting {
   return {
