@@ -36,9 +36,9 @@ export function cellVectors(lattice: LatticeParameters): number[] {
   return [aA, 0, 0, bA * cosGamma, bA * sinGamma, 0, cA * cosBeta, cA * cy, cA * cz];
 }
 
-/** Volume |a · (b × c)| in Å³. */
-export function cellVolumeA3(vectors: CellVectors): number {
-  const [ax, ay, az, bx, by, bz, cx, cy, cz] = vectors as [
+/** Determinant of a row-major 3 × 3 matrix. */
+export function determinant(matrix: readonly number[]): number {
+  const [a, b, c, d, e, f, g, h, i] = matrix as [
     number,
     number,
     number,
@@ -49,7 +49,12 @@ export function cellVolumeA3(vectors: CellVectors): number {
     number,
     number,
   ];
-  return Math.abs(ax * (by * cz - bz * cy) + ay * (bz * cx - bx * cz) + az * (bx * cy - by * cx));
+  return a * (e * i - f * h) + b * (f * g - d * i) + c * (d * h - e * g);
+}
+
+/** Volume |a · (b × c)| in Å³. */
+export function cellVolumeA3(vectors: CellVectors): number {
+  return Math.abs(determinant(vectors));
 }
 
 /** Cartesian position in Å of fractional coordinates: r = x a + y b + z c. */

@@ -1,4 +1,5 @@
 import { Problem } from '#common/errors/problem';
+import { determinant } from '#common/physics/cell-metric';
 import type { SymmetryOperation } from '#common/schemas/symmetry';
 
 const axes = ['x', 'y', 'z'] as const;
@@ -57,21 +58,6 @@ function parseComponent(component: string, whole: string): Component {
     throw unreadable(whole, 'a part is empty');
   }
   return { row, shift };
-}
-
-function determinant(w: readonly number[]): number {
-  const [a, b, c, d, e, f, g, h, i] = w as [
-    number,
-    number,
-    number,
-    number,
-    number,
-    number,
-    number,
-    number,
-    number,
-  ];
-  return a * (e * i - f * h) - b * (d * i - f * g) + c * (d * h - e * g);
 }
 
 /**

@@ -9,7 +9,6 @@ export const crystalSystem = z.enum([
   'hexagonal',
   'cubic',
 ]);
-export type CrystalSystem = z.infer<typeof crystalSystem>;
 
 /** One of the 530 tabulated settings of the 230 space groups. */
 export const spaceGroupSetting = z.object({

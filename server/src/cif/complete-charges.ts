@@ -1,10 +1,10 @@
+import { neutralCharges } from '#common/chemistry/neutral-charges';
 import { resolveCell } from '#common/physics/resolve-cell';
 import type { CellDefinition, CellSite } from '#common/schemas/cell';
 import type { Warning } from '#common/schemas/evaluation';
 import { symmetryOf } from '#server/symmetry/space-groups';
 
 import type { ReadStructure } from './read-structure.js';
-import { neutralChoices } from './structure/neutral-choices.js';
 
 /** A cell with as many charges as could be found. */
 export interface CompletedCharges {
@@ -73,7 +73,7 @@ function choicesFor(
       }
     }
   }
-  return neutralChoices(counts, known, mostChoices);
+  return neutralCharges(counts, known, mostChoices);
 }
 
 function choiceText(choice: ReadonlyMap<string, number>): string {

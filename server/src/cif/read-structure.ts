@@ -1,3 +1,4 @@
+import { neutralCharges } from '#common/chemistry/neutral-charges';
 import { applyLatticeConstraints } from '#common/physics/crystal-system';
 import { resolveCell } from '#common/physics/resolve-cell';
 import type { CellDefinition, CellSite, CellSymmetry } from '#common/schemas/cell';
@@ -9,7 +10,6 @@ import { findValue } from './format/block-values.js';
 import type { CifBlock } from './format/cif-document.js';
 import { readChemicalFormula } from './structure/chemical-formula.js';
 import { chooseOrigin } from './structure/choose-origin.js';
-import { neutralChoices } from './structure/neutral-choices.js';
 import { readLattice, type ReadLattice } from './structure/read-lattice.js';
 import { readSites, type ReadSite } from './structure/read-sites.js';
 import { readSymmetry } from './structure/read-symmetry.js';
@@ -142,7 +142,7 @@ function canBeNeutral(
       known += chargeE * count;
     }
   }
-  return neutralChoices(open, known, 1).length > 0;
+  return neutralCharges(open, known, 1).length > 0;
 }
 
 function countElements(

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 
+import { determinant } from '#common/physics/cell-metric';
 import type { SymmetryOperation } from '#common/schemas/symmetry';
 
 import { composed, operationKey } from './operation-key.js';
@@ -14,7 +15,7 @@ import {
   settingsOfNumber,
 } from './space-groups.js';
 import { symbolKeysOf } from './symbol-names.js';
-import { determinant, readTabulatedSettings } from './tabulated-settings.js';
+import { readTabulatedSettings } from './tabulated-settings.js';
 
 const settings = listSettings();
 

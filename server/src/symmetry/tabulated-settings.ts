@@ -10,6 +10,7 @@ import {
   type MoyoOperation,
 } from '@spglib/moyo-wasm';
 
+import { determinant } from '#common/physics/cell-metric';
 import {
   crystalSystem,
   type SpaceGroupSetting,
@@ -113,10 +114,4 @@ function exactTwentyFourths(value: number): number {
     throw new Error(`A tabulated translation ${value} is no multiple of 1/24.`);
   }
   return (((count % 24) + 24) % 24) / 24;
-}
-
-/** Determinant of a row-major 3 × 3 matrix. */
-export function determinant(m: readonly number[]): number {
-  const [a = 0, b = 0, c = 0, d = 0, e = 0, f = 0, g = 0, h = 0, i = 0] = m;
-  return a * (e * i - f * h) - b * (d * i - f * g) + c * (d * h - e * g);
 }

@@ -1,4 +1,4 @@
-import type { JSX } from 'react';
+import type { JSX, ReactNode } from 'react';
 
 import { ConfirmDialog } from '#client/components/confirm-dialog.tsx';
 import { useToast } from '#client/components/toast.tsx';
@@ -12,78 +12,79 @@ interface MoveDialogProps {
   onClose: () => void;
 }
 
-/** Hands a revision to the reviewers. */
-export function SubmitDialog({
+/** The words of a move and what it says when done. */
+interface Move {
+  readonly verb: 'submit' | 'withdraw';
+  readonly title: string;
+  readonly confirmLabel: string;
+  readonly doneMessage: string;
+}
+
+/** Asks before a revision changes hands, does it and says so. */
+function MoveDialog({
   latticeRef,
   revision,
   open,
   onClose,
-  openRemarks,
-}: MoveDialogProps & { openRemarks: number }): JSX.Element {
+  move,
+  children,
+}: MoveDialogProps & { move: Move; children: ReactNode }): JSX.Element {
   const show = useToast();
   const decide = useDecide(latticeRef, revision);
+  const onSuccess = (): void => {
+    onClose();
+    show({ message: move.doneMessage });
+  };
   return (
     <ConfirmDialog
       open={open}
       onClose={onClose}
-      title={`Submit revision ${revision} for review?`}
-      confirmLabel="Submit"
+      title={move.title}
+      confirmLabel={move.confirmLabel}
       isDangerous={false}
       isBusy={decide.isPending}
       error={decide.error}
-      onConfirm={() =>
-        decide.mutate(
-          { verb: 'submit' },
-          {
-            onSuccess: () => {
-              onClose();
-              show({ message: `Revision ${revision} is in review.` });
-            },
-          },
-        )
-      }
+      onConfirm={() => decide.mutate({ verb: move.verb }, { onSuccess })}
     >
+      {children}
+    </ConfirmDialog>
+  );
+}
+
+/** Hands a revision to the reviewers. */
+export function SubmitDialog({
+  openRemarks,
+  ...props
+}: MoveDialogProps & { openRemarks: number }): JSX.Element {
+  const move: Move = {
+    verb: 'submit',
+    title: `Submit revision ${props.revision} for review?`,
+    confirmLabel: 'Submit',
+    doneMessage: `Revision ${props.revision} is in review.`,
+  };
+  return (
+    <MoveDialog {...props} move={move}>
       A reviewer can then accept it or return it with a reason. You can withdraw it until then.
       {openRemarks > 0 && (
         <span className="mt-2 block">
           {openRemarks === 1 ? 'One remark is' : `${openRemarks} remarks are`} still open.
         </span>
       )}
-    </ConfirmDialog>
+    </MoveDialog>
   );
 }
 
 /** Takes a revision out of review again. */
-export function WithdrawDialog({
-  latticeRef,
-  revision,
-  open,
-  onClose,
-}: MoveDialogProps): JSX.Element {
-  const show = useToast();
-  const decide = useDecide(latticeRef, revision);
+export function WithdrawDialog(props: MoveDialogProps): JSX.Element {
+  const move: Move = {
+    verb: 'withdraw',
+    title: `Withdraw revision ${props.revision} from review?`,
+    confirmLabel: 'Withdraw',
+    doneMessage: `Revision ${props.revision} is withdrawn.`,
+  };
   return (
-    <ConfirmDialog
-      open={open}
-      onClose={onClose}
-      title={`Withdraw revision ${revision} from review?`}
-      confirmLabel="Withdraw"
-      isDangerous={false}
-      isBusy={decide.isPending}
-      error={decide.error}
-      onConfirm={() =>
-        decide.mutate(
-          { verb: 'withdraw' },
-          {
-            onSuccess: () => {
-              onClose();
-              show({ message: `Revision ${revision} is withdrawn.` });
-            },
-          },
-        )
-      }
-    >
+    <MoveDialog {...props} move={move}>
       It goes back to a draft state; its remarks stay.
-    </ConfirmDialog>
+    </MoveDialog>
   );
 }

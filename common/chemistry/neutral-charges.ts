@@ -1,15 +1,5 @@
 import { oxidationStates } from '#common/chemistry/oxidation-states';
 
-/** Charges that make a composition neutral, and whether they are the only choice. */
-export interface SuggestedCharges {
-  readonly charges: Readonly<Record<string, number>>;
-  readonly isUnique: boolean;
-  /** Number of neutral choices among states met equally often. */
-  readonly alternatives: number;
-}
-
-type Part = { readonly element: string; readonly count: number };
-
 const chargeTolerance = 1e-4;
 
 /** More elements than any small structure has; the search stays instant. */
@@ -82,34 +72,4 @@ export function neutralCharges(
     }
   }
   return [];
-}
-
-const mostCounted = 100;
-
-/**
- * Neutral charges of a composition from common oxidation states, one per element.
- *
- * @param composition elements with their counts (per cell or per formula unit)
- * @returns the choice whose states are most usual, and whether it is the only neutral one; null if
- *   there is none
- */
-export function suggestCharges(composition: readonly Part[]): SuggestedCharges | null {
-  const counts = new Map<string, number>();
-  for (const { element, count } of composition) {
-    counts.set(element, (counts.get(element) ?? 0) + count);
-  }
-  const choices = neutralCharges(counts, 0, mostCounted);
-  const rarity = (choice: ReadonlyMap<string, number>) =>
-    [...choice].reduce((sum, [element, charge]) => {
-      const { usual, occasional, rare } = oxidationStates(element);
-      return sum + [...usual, ...occasional, ...rare].indexOf(charge);
-    }, 0);
-  const [best] = [...choices].sort((a, b) => rarity(a) - rarity(b));
-  return best === undefined
-    ? null
-    : {
-        charges: Object.fromEntries(best),
-        isUnique: choices.length === 1,
-        alternatives: choices.length,
-      };
 }
