@@ -1,32 +1,31 @@
 import { AxeBuilder } from '@axe-core/playwright';
+import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { z } from 'zod';
 
-import { openBrowser, type Browser } from './chromium.js';
+import { openBrowser } from './chromium.js';
 import { startProduct, type Product } from './product.js';
 
 let product: Product;
+let empty: Product;
 
 beforeAll(async () => {
   product = await startProduct();
+  empty = await startProduct({ HOLDFAST_DEMO: 'off' });
 });
 
 afterAll(async () => {
   await product.stop();
+  await empty.stop();
 });
 
-const pages = [
-  '/w/kiln-lane',
-  '/w/kiln-lane/new',
-  '/w/kiln-lane/members',
-  '/w/kiln-lane/settings',
-  '/w/kiln-lane/audit',
-  '/me',
-];
+const workspacePages = ['', '/new', '/members', '/settings', '/audit'].map(
+  (page) => `/w/kiln-lane${page}`,
+);
 const sections = ['energy', 'cell', 'sites', 'remarks', 'history'];
 
 /** What axe finds on the page as it stands, in words. */
-async function findings(browser: Browser): Promise<string[]> {
-  const page = browser.context.pages()[0]!;
+async function findings(page: Page): Promise<string[]> {
   const { violations } = await new AxeBuilder({ page })
     .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'])
     .analyze();
@@ -35,25 +34,63 @@ async function findings(browser: Browser): Promise<string[]> {
   );
 }
 
+/** Opens an address, waits for its heading and its data, and asks axe. */
+async function findingsAt(page: Page, address: string): Promise<string[]> {
+  await page.goto(address);
+  await page.getByRole('heading', { level: 1 }).first().waitFor();
+  await page.waitForLoadState('networkidle');
+  return await findings(page);
+}
+
+/** Makes something through the API as the signed-in person and gives the secret of its link. */
+async function makeLink(page: Page, address: string, body: object): Promise<string> {
+  const response = await page.request.post(address, {
+    data: body,
+    headers: { Origin: product.origin },
+  });
+  expect(response.status()).toBe(201);
+  return z.object({ token: z.string() }).parse(await response.json()).token;
+}
+
+/** Addresses that people without an account open from a link. */
+async function linkedPages(page: Page, lattice: string): Promise<string[]> {
+  const api = `${product.origin}/api/workspaces/kiln-lane`;
+  const latticeId = lattice.split('/').at(-1);
+  const share = await makeLink(page, `${api}/lattices/${latticeId}/revisions/1/shares`, {});
+  const email = `new-${Date.now()}@kiln-lane.example`;
+  const invitation = await makeLink(page, `${api}/invitations`, { email, role: 'reviewer' });
+  return [
+    `/s/${share}`,
+    `/s/${'A'.repeat(43)}`,
+    `/accept-invite/${invitation}`,
+    `/accept-invite/${'A'.repeat(43)}`,
+  ];
+}
+
 describe.each(['light', 'dark'] as const)('every page in %s', (colorScheme) => {
   it('gives axe nothing to find', { timeout: 420_000 }, async () => {
     const browser = await openBrowser('none', { colorScheme });
     try {
       const page = browser.context.pages()[0] ?? (await browser.context.newPage());
-      await page.goto(`${product.origin}/sign-in`);
-      await page.getByRole('button', { name: /Runa Halvard/ }).waitFor();
-      const found = await findings(browser);
+      const found = await findingsAt(page, `${empty.origin}/setup`);
+      found.push(...(await findingsAt(page, `${product.origin}/sign-in`)));
       await page.getByRole('button', { name: /Runa Halvard/ }).click();
-      await page.getByRole('link', { name: 'Periclase, trial 3' }).first().waitFor();
-      const lattice = await page
-        .getByRole('link', { name: 'Periclase, trial 3' })
-        .first()
-        .getAttribute('href');
-      for (const path of [...pages, ...sections.map((name) => `${lattice}?section=${name}`)]) {
-        await page.goto(`${product.origin}${path}`);
-        await page.getByRole('heading', { level: 1 }).first().waitFor();
-        await page.waitForLoadState('networkidle');
-        found.push(...(await findings(browser)));
+      const periclase = page.getByRole('link', { name: 'Periclase, trial 3' }).first();
+      await periclase.waitFor();
+      const lattice = (await periclase.getAttribute('href')) ?? '';
+      const addresses = [
+        ...workspacePages,
+        ...sections.map((name) => `${lattice}?section=${name}`),
+        '/me',
+        '/nothing/is/here',
+        ...(await linkedPages(page, lattice)),
+      ];
+      for (const address of addresses) {
+        found.push(...(await findingsAt(page, `${product.origin}${address}`)));
+      }
+      await page.context().clearCookies();
+      for (const address of addresses.slice(-4)) {
+        found.push(...(await findingsAt(page, `${product.origin}${address}`)));
       }
       expect(found).toEqual([]);
     } finally {
