@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 
 import type { FieldProblem } from '#common/errors/problem';
 import { resolveCell } from '#common/physics/resolve-cell';
+import { formatOperation } from '#common/physics/symmetry-operation';
 import type { CellDefinition, CellSite } from '#common/schemas/cell';
 import type { SpaceGroupSetting } from '#common/schemas/symmetry';
 import { groups } from '#tests/helpers/group-closure';
@@ -245,6 +246,19 @@ describe('edges and angles', () => {
     expect(fieldsOf(withLattice('4 4 5 90 90 90', 'Pm-3m'))).toEqual([
       'cell.system_constraint symmetry',
     ]);
+  });
+
+  it('may stray by a measuring error from operations that are a tabulated setting', () => {
+    const fieldsWith = (b: string) => {
+      const cell = cubicCell(magnesia, {
+        symmetry: { kind: 'operations', operations: groups['Fm-3m'].map(formatOperation) },
+      });
+      const stretched = { ...cell, lattice: { ...cell.lattice, b } };
+      const symmetry = { operations: groups['Fm-3m'], setting: cubicSetting };
+      return fieldsOf(resolveCell(stretched, symmetry).problems);
+    };
+    expect(fieldsWith('4.2124')).toEqual([]);
+    expect(fieldsWith('4.23')).toEqual(['cell.system_constraint symmetry']);
   });
 
   it('are not blamed for operations that are incomplete', () => {

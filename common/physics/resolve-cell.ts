@@ -159,7 +159,10 @@ export function resolveCell(
 ): { cell: ResolvedCell | null; problems: FieldProblem[] } {
   const parameters = evaluateParameters(definition.parameters);
   const problems = [...parameters.problems];
-  const lattice = resolveLattice(definition.lattice, parameters, symmetry.setting);
+  // Operations typed by hand bind the cell to 1e-3, even where they happen to be a tabulated setting:
+  // the form, which doesn't look them up, and the server must say the same.
+  const setting = definition.symmetry.kind === 'setting' ? symmetry.setting : null;
+  const lattice = resolveLattice(definition.lattice, parameters, setting);
   if (Array.isArray(lattice)) {
     problems.push(...lattice);
   }
@@ -167,7 +170,9 @@ export function resolveCell(
     const message = 'Add at least one site: an element, its charge and where it is.';
     problems.push({ code: 'cell.no_sites', field: 'sites', message });
   }
-  problems.push(...symmetryProblems(symmetry, Array.isArray(lattice) ? null : lattice.vectorsA));
+  problems.push(
+    ...symmetryProblems({ ...symmetry, setting }, Array.isArray(lattice) ? null : lattice.vectorsA),
+  );
   const takenLabels = new Set<string>();
   const rows = definition.sites
     .map((site, index) => readSite(site, index, takenLabels, parameters, problems))
