@@ -2,6 +2,7 @@ import { z } from 'zod';
 
 import { cellDefinition, evaluationMethod } from '#common/schemas/cell';
 import { bounded, evaluationProblem, storedEvaluation } from '#common/schemas/evaluation';
+import { defaultEnergeticModel, energeticModel, verdictSummary } from '#common/schemas/energetics';
 import { id, pageOf, pageQuery, personSummary, timestamp } from '#common/schemas/shared';
 
 export const revisionState = z.enum(['draft', 'in_review', 'accepted', 'returned']);
@@ -24,6 +25,8 @@ export const latticeSummary = z.object({
   energyEvPerFormulaUnit: bounded.nullable(),
   /** Why there is no energy, when there is none. */
   problemCode: z.string().nullable(),
+  /** What the checks said when the newest revision was saved; null before. */
+  verdict: verdictSummary.nullable(),
   state: revisionState,
   /** Number of the newest revision; 0 when only a draft exists. */
   headRevision: z.number().int(),
@@ -61,6 +64,7 @@ export const createLatticeRequest = z.object({
   name: latticeName,
   cell: cellDefinition,
   method: evaluationMethod.optional(),
+  model: energeticModel.optional(),
   prototype: z.string().max(60).nullable().default(null),
   tags: tags.default([]),
 });
@@ -79,12 +83,17 @@ export const draft = z.object({
   isChanged: z.boolean(),
   cell: cellDefinition,
   method: evaluationMethod,
+  model: energeticModel,
   prototype: z.string().nullable(),
   updatedAt: timestamp.nullable(),
   updatedBy: personSummary.nullable(),
 });
 export type Draft = z.infer<typeof draft>;
-export const putDraftRequest = z.object({ cell: cellDefinition, method: evaluationMethod });
+export const putDraftRequest = z.object({
+  cell: cellDefinition,
+  method: evaluationMethod,
+  model: energeticModel.default(defaultEnergeticModel),
+});
 export type PutDraftRequest = z.infer<typeof putDraftRequest>;
 
 export const saveRevisionRequest = z.object({ note: z.string().trim().max(500).default('') });
@@ -114,6 +123,7 @@ export const revisionDetail = revisionSummary.extend({
   latticeName: z.string(),
   cell: cellDefinition,
   method: evaluationMethod,
+  model: energeticModel,
   prototype: z.string().nullable(),
   evaluation: storedEvaluation.nullable(),
   evaluationProblem: evaluationProblem.nullable(),

@@ -10,7 +10,10 @@ import { Page } from '#client/components/page.tsx';
 import { CellForm } from '#client/features/cell-editor/components/cell-form.tsx';
 import { EnergyLine } from '#client/features/electrostatics/components/energy-line.tsx';
 import { useResolvedCell } from '#client/features/cell-editor/hooks/use-resolved-cell.ts';
-import { useLatticeAddress } from '#client/features/lattices/hooks/use-lattice-address.ts';
+import {
+  computedSections,
+  useLatticeAddress,
+} from '#client/features/lattices/hooks/use-lattice-address.ts';
 import { sharedRevisionQuery } from '#client/features/sharing/api/shares.ts';
 import { ApiError } from '#client/lib/api-error.ts';
 import { formatDay, formatExact } from '#client/lib/relative-age.ts';
@@ -53,7 +56,8 @@ function Shown({ shared }: { shared: SharedRevision }): JSX.Element {
       address={address}
       update={update}
       annotations={[]}
-      sections={['cell', 'energy', 'sites']}
+      energetics={{ workspace: null, content: revision, onModel: null }}
+      sections={['cell', ...computedSections, 'sites']}
       mayRemark={false}
       panels={{
         cell: (

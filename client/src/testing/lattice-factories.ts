@@ -1,5 +1,6 @@
 import type { CellDefinition } from '#common/schemas/cell';
 import { defaultEvaluationMethod } from '#common/schemas/cell';
+import { defaultEnergeticModel } from '#common/schemas/energetics';
 import type { EvaluationResult, PairLedger, StoredEvaluation } from '#common/schemas/evaluation';
 import type { Draft, RevisionDetail } from '#common/schemas/lattice';
 import type { Annotation } from '#common/schemas/review';
@@ -152,6 +153,7 @@ export const draftOf = (change: Partial<Draft> = {}): Draft => ({
   isChanged: false,
   cell: cellOf(),
   method: defaultEvaluationMethod,
+  model: defaultEnergeticModel,
   prototype: 'caesium-chloride',
   updatedAt: null,
   updatedBy: null,
@@ -177,6 +179,7 @@ export const revisionOf = (change: Partial<RevisionDetail> = {}): RevisionDetail
   latticeName: 'Caesium chloride, trial 3',
   cell: cellOf(),
   method: defaultEvaluationMethod,
+  model: defaultEnergeticModel,
   prototype: 'caesium-chloride',
   evaluation: evaluationOf(),
   evaluationProblem: null,

@@ -22,6 +22,7 @@ export const presentLattice = (row: ShelfRow): LatticeSummary => ({
     row.energyBoundEvPerFormulaUnit,
   ),
   problemCode: row.problemCode,
+  verdict: row.verdict,
   state: row.state,
   headRevision: row.headRevision,
   hasDraft: row.hasDraft,

@@ -3,6 +3,7 @@ import type { z } from 'zod';
 
 import { Problem } from '#common/errors/problem';
 import { defaultEvaluationMethod } from '#common/schemas/cell';
+import { defaultEnergeticModel } from '#common/schemas/energetics';
 import type {
   CreateLatticeRequest,
   ShelfQuery,
@@ -52,6 +53,7 @@ export class LatticesService {
   async create(context: RequestContext, asked: CreateLatticeRequest): Promise<ShelfRow> {
     assertCan(context, 'lattice.create');
     const { name, tags, prototype, cell, method = defaultEvaluationMethod } = asked;
+    const { model = defaultEnergeticModel } = asked;
     const workspaceId = context.workspace.id;
     const now = this.clock.now();
     const version = 1;
@@ -61,7 +63,8 @@ export class LatticesService {
     };
     const { id } = await withTransaction(this.db, async (tx) => {
       const row = await this.lattices.insert(lattice, tx);
-      const draft = { workspaceId, latticeId: row.id, baseRevision: 0, version, cell, method };
+      const content = { cell, method, model };
+      const draft = { workspaceId, latticeId: row.id, baseRevision: 0, version, ...content };
       await this.drafts.put({ ...draft, updatedAt: now, updatedById: context.user.id }, tx);
       await this.audit.record(context, 'lattice.create', name, undefined, tx);
       return row;

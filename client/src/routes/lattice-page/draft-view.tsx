@@ -17,7 +17,7 @@ import {
 } from '#client/features/cell-editor/hooks/use-editor-store.ts';
 import { EnergyLine } from '#client/features/electrostatics/components/energy-line.tsx';
 import { useResolvedCell } from '#client/features/cell-editor/hooks/use-resolved-cell.ts';
-import { isSameContent } from '#client/features/cell-editor/model/editor-history.ts';
+import { contentOf, isSameContent } from '#client/features/cell-editor/model/editor-history.ts';
 import type { EditorStore } from '#client/features/cell-editor/model/editor-store.ts';
 import {
   useLiveEvaluation,
@@ -28,7 +28,10 @@ import { revisionQuery } from '#client/features/lattices/api/revisions.ts';
 import { HistorySection } from '#client/features/lattices/components/history-section.tsx';
 import { LatticeName } from '#client/features/lattices/components/lattice-name.tsx';
 import { SaveRevisionDialog } from '#client/features/lattices/components/save-revision-dialog.tsx';
-import type { LatticeAddress } from '#client/features/lattices/hooks/use-lattice-address.ts';
+import {
+  computedSections,
+  type LatticeAddress,
+} from '#client/features/lattices/hooks/use-lattice-address.ts';
 import { annotationsQuery } from '#client/features/review/api/annotations.ts';
 import { ApiError, messageOf } from '#client/lib/api-error.ts';
 import type { LatticeRef } from '#client/lib/lattice-keys.ts';
@@ -139,8 +142,8 @@ function useStartDraft(store: EditorStore, { latticeRef, update }: DraftViewProp
   const show = useToast();
   return (number: number): void => {
     client.fetchQuery(revisionQuery(latticeRef, number)).then(
-      ({ cell, method }) => {
-        store.edit({ cell, method }, null);
+      (revision) => {
+        store.edit(contentOf(revision), null);
         update({ section: 'cell' });
         show({
           message: `The draft is now as revision ${number} was.`,
@@ -177,10 +180,10 @@ function Editor(props: DraftViewProps & { draft: Draft }): JSX.Element {
   const resolved = useResolvedCell(present.cell);
   const isReadable = resolved.cell !== null;
   const isHead = head !== null && !isEdited;
+  const { cell, method } = present;
   const body = useMemo(
-    () =>
-      isReadable && !isHead && !isLoading ? { cell: present.cell, method: present.method } : null,
-    [isReadable, isHead, isLoading, present],
+    () => (isReadable && !isHead && !isLoading ? { cell, method } : null),
+    [isReadable, isHead, isLoading, cell, method],
   );
   const computed = useLiveEvaluation(latticeRef.workspace, body);
   const live = isLoading ? waiting : isHead ? frozenEvaluation(head) : computed;
@@ -255,7 +258,12 @@ function Editor(props: DraftViewProps & { draft: Draft }): JSX.Element {
         address={address}
         update={update}
         annotations={annotations}
-        sections={['cell', 'energy', 'sites', 'remarks', 'history']}
+        energetics={{
+          workspace: latticeRef.workspace,
+          content: present,
+          onModel: can('draft.edit') ? (model, field) => store.edit({ model }, field) : null,
+        }}
+        sections={['cell', ...computedSections, 'sites', 'remarks', 'history']}
         mayRemark={can('annotation.create') && lattice.headRevision > 0}
         panels={{
           cell: (

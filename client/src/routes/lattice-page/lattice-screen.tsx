@@ -18,6 +18,10 @@ import {
   type SectionKey,
 } from '#client/features/lattices/hooks/use-lattice-address.ts';
 import { remarksByPair } from '#client/features/review/model/anchors.ts';
+import {
+  energeticsPanel,
+  type EnergeticsInput,
+} from '#client/routes/lattice-page/energetics-panel.tsx';
 import { SitesPanel } from '#client/routes/lattice-page/sites-panel.tsx';
 import { StagePanel } from '#client/routes/lattice-page/stage-panel.tsx';
 
@@ -30,6 +34,7 @@ export interface LatticeScreenProps {
   address: LatticeAddress;
   update: (change: Partial<LatticeAddress>) => void;
   annotations: readonly Annotation[];
+  energetics: EnergeticsInput;
   /** Sections in their order; energy and sites are drawn here, the others are given. */
   sections: readonly SectionKey[];
   panels: Partial<Record<SectionKey, ReactNode>>;
@@ -127,8 +132,17 @@ function Panel(props: LatticeScreenProps & { picked: readonly PickedIon[] }): JS
   if (given !== undefined) {
     return <>{given}</>;
   }
-  const result = live.evaluation?.result;
-  if (address.section === 'sites' && result !== undefined && live.problem === null) {
+  const result = live.problem === null ? live.evaluation?.result : undefined;
+  if (result !== undefined && resolved.cell !== null) {
+    const { energetics, update: change } = props;
+    const { section } = address;
+    const at = { section, cell: resolved.cell, result, energetics, address, update: change };
+    const panel = energeticsPanel(at);
+    if (panel !== null) {
+      return panel;
+    }
+  }
+  if (address.section === 'sites' && result !== undefined) {
     return (
       <SitesPanel
         cell={resolved.cell}

@@ -10,12 +10,16 @@ import { draftQuery, putDraft, readDraft } from '#client/features/cell-editor/ap
 import { CellForm } from '#client/features/cell-editor/components/cell-form.tsx';
 import { EnergyLine } from '#client/features/electrostatics/components/energy-line.tsx';
 import { useResolvedCell } from '#client/features/cell-editor/hooks/use-resolved-cell.ts';
+import { contentOf } from '#client/features/cell-editor/model/editor-history.ts';
 import { rememberUnsaved } from '#client/features/cell-editor/model/unsaved-copy.ts';
 import { pickedIons } from '#client/features/electrostatics/model/picked-ions.ts';
 import { revisionQuery } from '#client/features/lattices/api/revisions.ts';
 import { HistorySection } from '#client/features/lattices/components/history-section.tsx';
 import { LatticeName } from '#client/features/lattices/components/lattice-name.tsx';
-import type { LatticeAddress } from '#client/features/lattices/hooks/use-lattice-address.ts';
+import {
+  computedSections,
+  type LatticeAddress,
+} from '#client/features/lattices/hooks/use-lattice-address.ts';
 import { annotationsQuery } from '#client/features/review/api/annotations.ts';
 import { messageOf } from '#client/lib/api-error.ts';
 import type { LatticeRef } from '#client/lib/lattice-keys.ts';
@@ -42,11 +46,11 @@ function useStartDraft({ latticeRef, update }: RevisionViewProps) {
   const show = useToast();
   return useMutation({
     mutationFn: async (number: number) => {
-      const [{ cell, method }, current] = await Promise.all([
+      const [revision, current] = await Promise.all([
         client.fetchQuery(revisionQuery(latticeRef, number)),
         readDraft(latticeRef),
       ]);
-      return putDraft(latticeRef, { cell, method }, current.etag);
+      return putDraft(latticeRef, contentOf(revision), current.etag);
     },
     onSuccess: (draft, number) => {
       rememberUnsaved(latticeRef.latticeId, null);
@@ -151,7 +155,12 @@ function Loaded(props: RevisionViewProps & { revision: RevisionDetail }): JSX.El
         address={address}
         update={update}
         annotations={annotations}
-        sections={['cell', 'energy', 'sites', 'remarks', 'history']}
+        energetics={{
+          workspace: latticeRef.workspace,
+          content: revision,
+          onModel: null,
+        }}
+        sections={['cell', ...computedSections, 'sites', 'remarks', 'history']}
         mayRemark={can('annotation.create')}
         panels={{
           cell: (

@@ -8,7 +8,10 @@ import { CellForm } from '#client/features/cell-editor/components/cell-form.tsx'
 import { EnergyLine } from '#client/features/electrostatics/components/energy-line.tsx';
 import { useResolvedCell } from '#client/features/cell-editor/hooks/use-resolved-cell.ts';
 import { useLiveEvaluation } from '#client/features/electrostatics/hooks/use-live-evaluation.ts';
-import type { LatticeAddress } from '#client/features/lattices/hooks/use-lattice-address.ts';
+import {
+  computedSections,
+  type LatticeAddress,
+} from '#client/features/lattices/hooks/use-lattice-address.ts';
 import type { LatticeRef } from '#client/lib/lattice-keys.ts';
 import { useCan } from '#client/lib/session.ts';
 import { spaceGroupOf } from '#client/routes/lattice-page/frozen-revision.ts';
@@ -67,7 +70,12 @@ function Loaded({
       address={address}
       update={update}
       annotations={[]}
-      sections={['cell', 'energy', 'sites']}
+      energetics={{
+        workspace: latticeRef.workspace,
+        content: draft,
+        onModel: null,
+      }}
+      sections={['cell', ...computedSections, 'sites']}
       mayRemark={false}
       panels={{
         cell: (

@@ -6,7 +6,7 @@ import { etagOf } from './drafts.service.js';
 
 export function presentDraft(state: DraftState): Draft {
   const { draft, head, updatedBy } = state;
-  const { cell, method } = (draft ?? head)!;
+  const { cell, method, model } = (draft ?? head)!;
   return {
     latticeId: state.latticeId,
     etag: etagOf(state),
@@ -14,6 +14,7 @@ export function presentDraft(state: DraftState): Draft {
     isChanged: draft !== null,
     cell,
     method,
+    model,
     prototype: state.prototype,
     updatedAt: draft?.updatedAt.toISOString() ?? null,
     updatedBy: updatedBy && presentPerson(updatedBy),

@@ -2,6 +2,7 @@ import { sql } from 'drizzle-orm';
 import { check, foreignKey, integer, jsonb, pgTable, uuid } from 'drizzle-orm/pg-core';
 
 import type { CellDefinition, EvaluationMethod } from '#common/schemas/cell';
+import { defaultEnergeticModel, type EnergeticModel } from '#common/schemas/energetics';
 import { moment } from '#server/database/columns';
 import { users } from '#server/users/user.table';
 
@@ -17,6 +18,7 @@ export const drafts = pgTable(
     version: integer('version').notNull(),
     cell: jsonb('cell').$type<CellDefinition>().notNull(),
     method: jsonb('method').$type<EvaluationMethod>().notNull(),
+    model: jsonb('model').$type<EnergeticModel>().notNull().default(defaultEnergeticModel),
     updatedAt: moment('updated_at').notNull().defaultNow(),
     updatedById: uuid('updated_by_id').notNull(),
   },
@@ -34,7 +36,7 @@ export const drafts = pgTable(
     check('drafts_counts', sql`${table.baseRevision} >= 0 and ${table.version} >= 1`),
     check(
       'drafts_json',
-      sql`jsonb_typeof(${table.cell}) = 'object' and jsonb_typeof(${table.method}) = 'object'`,
+      sql`jsonb_typeof(${table.cell}) = 'object' and jsonb_typeof(${table.method}) = 'object' and jsonb_typeof(${table.model}) = 'object'`,
     ),
   ],
 );

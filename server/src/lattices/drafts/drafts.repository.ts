@@ -20,7 +20,7 @@ export interface DraftState {
   readonly prototype: string | null;
   readonly headRevision: number;
   readonly draft: DraftRow | null;
-  readonly head: Pick<typeof revisions.$inferSelect, 'cell' | 'method'> | null;
+  readonly head: Pick<typeof revisions.$inferSelect, 'cell' | 'method' | 'model'> | null;
   readonly updatedBy: { readonly id: string; readonly name: string } | null;
 }
 
@@ -41,7 +41,7 @@ export class DraftsRepository {
         prototype: lattices.prototype,
         headRevision: lattices.headRevision,
         draft: drafts,
-        head: { cell: revisions.cell, method: revisions.method },
+        head: { cell: revisions.cell, method: revisions.method, model: revisions.model },
         updatedBy: { id: users.id, name: users.name },
       })
       .from(lattices)

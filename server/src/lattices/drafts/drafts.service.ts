@@ -46,7 +46,7 @@ export class DraftsService {
     context: RequestContext,
     latticeId: string,
     ifMatch: string | undefined,
-    { cell, method }: PutDraftRequest,
+    content: PutDraftRequest,
   ): Promise<DraftState> {
     assertCan(context, 'draft.edit');
     const wanted = requireIfMatch(ifMatch);
@@ -55,7 +55,7 @@ export class DraftsService {
       const lattice = await this.lattices.lock(context, latticeId, tx);
       const before = await this.state(context, latticeId, tx);
       if (!matchesEtag(wanted, etagOf(before))) {
-        if (isSentAgain(before, context.user.id, { cell, method })) {
+        if (isSentAgain(before, context.user.id, content)) {
           return { state: before, isNew: false };
         }
         throw draftConflict(etagOf(before));
@@ -64,13 +64,14 @@ export class DraftsService {
       const now = this.clock.now();
       const place = { workspaceId, latticeId, baseRevision: lattice.headRevision, version };
       const by = { updatedAt: now, updatedById: context.user.id };
-      await this.drafts.put({ ...place, cell, method, ...by }, tx);
+      await this.drafts.put({ ...place, ...content, ...by }, tx);
       const change = { draftVersion: version, updatedAt: now };
       await this.latticeRows.update(workspaceId, latticeId, change, tx);
       return { state: await this.state(context, latticeId, tx), isNew: true };
     });
     if (isNew && state.headRevision === 0) {
       const { version } = state.draft!;
+      const { cell, method } = content;
       await this.headlines.refresh({ workspaceId, latticeId, version }, cell, method);
     }
     return state;
@@ -128,6 +129,6 @@ function isSentAgain({ draft }: DraftState, userId: string, sent: PutDraftReques
   return (
     draft !== null &&
     draft.updatedById === userId &&
-    isDeepStrictEqual({ cell: draft.cell, method: draft.method }, sent)
+    isDeepStrictEqual({ cell: draft.cell, method: draft.method, model: draft.model }, sent)
   );
 }

@@ -35,6 +35,7 @@ export const presentRevisionDetail = ({
   latticeName: revision.latticeName,
   cell: revision.cell,
   method: revision.method,
+  model: revision.model,
   prototype: revision.prototype,
   evaluation: evaluation && presentEvaluation(evaluation),
   evaluationProblem: revision.evaluationProblem,

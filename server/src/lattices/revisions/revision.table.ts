@@ -14,6 +14,7 @@ import {
 } from 'drizzle-orm/pg-core';
 
 import type { CellDefinition, EvaluationMethod } from '#common/schemas/cell';
+import { defaultEnergeticModel, type EnergeticModel } from '#common/schemas/energetics';
 import type { EvaluationProblem } from '#common/schemas/evaluation';
 import { createdAt, idColumn, moment } from '#server/database/columns';
 import { evaluations } from '#server/electrostatics/evaluation.table';
@@ -36,6 +37,7 @@ export const revisions = pgTable(
     createdAt: createdAt(),
     cell: jsonb('cell').$type<CellDefinition>().notNull(),
     method: jsonb('method').$type<EvaluationMethod>().notNull(),
+    model: jsonb('model').$type<EnergeticModel>().notNull().default(defaultEnergeticModel),
     formula: text('formula').notNull(),
     evaluationHash: text('evaluation_hash'),
     /** Why there is no evaluation, when there is none. */
@@ -84,7 +86,7 @@ export const revisions = pgTable(
     check('revisions_number_counts', sql`${table.number} >= 1`),
     check(
       'revisions_json',
-      sql`jsonb_typeof(${table.cell}) = 'object' and jsonb_typeof(${table.method}) = 'object' and jsonb_typeof(coalesce(${table.evaluationProblem}, '{}')) = 'object'`,
+      sql`jsonb_typeof(${table.cell}) = 'object' and jsonb_typeof(${table.method}) = 'object' and jsonb_typeof(${table.model}) = 'object' and jsonb_typeof(coalesce(${table.evaluationProblem}, '{}')) = 'object'`,
     ),
     check(
       'revisions_evaluated_or_why_not',

@@ -25,7 +25,8 @@ interface People {
 }
 
 /** A revision as a list shows it: without what makes it large. */
-export type RevisionListRow = Omit<RevisionRow, 'cell' | 'method' | 'evaluationProblem'> & People;
+export type RevisionListRow = Omit<RevisionRow, 'cell' | 'method' | 'model' | 'evaluationProblem'> &
+  People;
 
 /** A revision with everything that it is. */
 export type RevisionFullRow = RevisionRow &
@@ -53,6 +54,7 @@ const people = {
 const {
   cell: _cell,
   method: _method,
+  model: _model,
   evaluationProblem: _problem,
   ...listed
 } = getTableColumns(revisions);

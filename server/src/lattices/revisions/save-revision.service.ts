@@ -74,7 +74,7 @@ export class SaveRevisionService {
 
   private async insert(
     context: RequestContext,
-    { latticeId, cell, method }: DraftRow,
+    { latticeId, cell, method, model }: DraftRow,
     number: number,
     note: string,
     outcome: CellOutcome,
@@ -93,6 +93,7 @@ export class SaveRevisionService {
         createdAt: now,
         cell,
         method,
+        model,
         formula: outcome.identity.formula,
         evaluationHash: outcome.evaluation?.hash ?? null,
         evaluationProblem: outcome.problem,
@@ -121,7 +122,8 @@ function changedDraft(state: DraftState, wanted: string): DraftRow {
     draft === null ||
     (head !== null &&
       isDeepStrictEqual(draft.cell, head.cell) &&
-      isDeepStrictEqual(draft.method, head.method));
+      isDeepStrictEqual(draft.method, head.method) &&
+      isDeepStrictEqual(draft.model, head.model));
   if (isSame) {
     throw new Problem('revision.unchanged');
   }

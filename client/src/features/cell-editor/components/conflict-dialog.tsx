@@ -5,7 +5,10 @@ import { Button } from '#client/components/button.tsx';
 import { Dialog } from '#client/components/dialog.tsx';
 import { RelativeTime } from '#client/components/relative-time.tsx';
 import { differences } from '#client/features/cell-editor/model/content-difference.ts';
-import type { EditorContent } from '#client/features/cell-editor/model/editor-history.ts';
+import {
+  contentOf,
+  type EditorContent,
+} from '#client/features/cell-editor/model/editor-history.ts';
 
 interface ConflictDialogProps {
   theirs: Draft | null;
@@ -17,7 +20,7 @@ interface ConflictDialogProps {
 const shown = 12;
 
 function Differences({ mine, theirs }: { mine: EditorContent; theirs: Draft }): JSX.Element {
-  const list = differences(mine, { cell: theirs.cell, method: theirs.method });
+  const list = differences(mine, contentOf(theirs));
   return (
     <div className="max-h-80 overflow-auto">
       <table className="w-full border-collapse text-small">

@@ -10,7 +10,7 @@ export interface Difference {
 
 const missing = '–';
 
-function entries({ cell, method }: EditorContent): Map<string, string> {
+function entries({ cell, method, model }: EditorContent): Map<string, string> {
   const map = new Map<string, string>();
   const names = { a: 'a', b: 'b', c: 'c', alpha: 'α', beta: 'β', gamma: 'γ' } as const;
   for (const [name, symbol] of Object.entries(names)) {
@@ -31,6 +31,9 @@ function entries({ cell, method }: EditorContent): Map<string, string> {
   }
   map.set('tolerance', String(method.toleranceRelative));
   map.set('uniform background', method.uniformBackground ? 'on' : 'off');
+  map.set('repulsion', JSON.stringify(model.repulsion));
+  map.set('measured values', JSON.stringify(model.measured));
+  map.set('formation choices', JSON.stringify(model.formation));
   return map;
 }
 

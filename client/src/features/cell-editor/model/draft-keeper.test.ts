@@ -1,6 +1,7 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 
 import { defaultEvaluationMethod } from '#common/schemas/cell';
+import { defaultEnergeticModel } from '#common/schemas/energetics';
 import type { Draft } from '#common/schemas/lattice';
 import {
   DraftKeeper,
@@ -14,6 +15,7 @@ import { cellOf, draftOf, mara } from '#client/testing/lattice-factories.ts';
 const withEdge = (a: string): EditorContent => ({
   cell: cellOf({ lattice: { ...cellOf().lattice, a } }),
   method: defaultEvaluationMethod,
+  model: defaultEnergeticModel,
 });
 const conflict = new ApiError(412, 'draft.conflict', 'Someone else changed this draft.');
 const offline = new ApiError(0, 'network.unreachable', 'No connection.');

@@ -1,5 +1,6 @@
 import type { Draft, PutDraftRequest } from '#common/schemas/lattice';
 import {
+  contentOf,
   isSameContent,
   type EditorContent,
 } from '#client/features/cell-editor/model/editor-history.ts';
@@ -49,7 +50,7 @@ export class DraftKeeper {
     private readonly world: KeeperWorld,
   ) {
     this.etag = draft.etag;
-    this.saved = { cell: draft.cell, method: draft.method };
+    this.saved = contentOf(draft);
     this.wanted = this.saved;
     if (draft.isChanged && draft.updatedAt !== null) {
       this.status = { kind: 'saved', atMs: Date.parse(draft.updatedAt) };
@@ -120,7 +121,7 @@ export class DraftKeeper {
   /** Conflict: the own edit replaces theirs, knowingly. */
   async keepMine(theirs: Draft): Promise<void> {
     this.etag = theirs.etag;
-    this.saved = { cell: theirs.cell, method: theirs.method };
+    this.saved = contentOf(theirs);
     this.setStatus({ kind: 'waiting' });
     await this.flush();
   }
@@ -137,7 +138,7 @@ export class DraftKeeper {
 
   private take(draft: Draft): void {
     this.etag = draft.etag;
-    this.saved = { cell: draft.cell, method: draft.method };
+    this.saved = contentOf(draft);
     this.wanted = this.saved;
     this.setStatus({ kind: 'clean' });
   }
@@ -153,7 +154,7 @@ export class DraftKeeper {
     if (!wasOffline) {
       this.setStatus({ kind: 'saving' });
     }
-    this.running = this.world.put({ cell: content.cell, method: content.method }, this.etag).then(
+    this.running = this.world.put(content, this.etag).then(
       (draft) => this.succeed(draft, content),
       (error: unknown) => this.fail(error),
     );
@@ -186,7 +187,7 @@ export class DraftKeeper {
   private async meetConflict(): Promise<void> {
     try {
       const theirs = await this.world.read();
-      if (isSameContent({ cell: theirs.cell, method: theirs.method }, this.wanted)) {
+      if (isSameContent(contentOf(theirs), this.wanted)) {
         this.takeTheirs(theirs);
       } else {
         this.setStatus({ kind: 'conflict', theirs });

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 
 import { defaultEvaluationMethod } from '#common/schemas/cell';
+import { defaultEnergeticModel } from '#common/schemas/energetics';
 import {
   isSameContent,
   pushEdit,
@@ -14,6 +15,7 @@ import { cellOf } from '#client/testing/lattice-factories.ts';
 const withEdge = (a: string): EditorContent => ({
   cell: cellOf({ lattice: { ...cellOf().lattice, a } }),
   method: defaultEvaluationMethod,
+  model: defaultEnergeticModel,
 });
 const edge = (content: EditorContent): string => content.cell.lattice.a;
 
@@ -50,10 +52,15 @@ describe('the history of an edit', () => {
   });
 
   it('compares what is said, not the order of keys', () => {
-    const { cell, method } = withEdge('4');
+    const content = withEdge('4');
+    const { cell, model } = content;
     const { a, ...rest } = cell.lattice;
-    expect(
-      isSameContent({ cell, method }, { cell: { ...cell, lattice: { ...rest, a } }, method }),
-    ).toBe(true);
+    const { repulsion, ...others } = model;
+    const reordered = { ...content, cell: { ...cell, lattice: { ...rest, a } } };
+    expect(isSameContent(content, { ...reordered, model: { ...others, repulsion } })).toBe(true);
+    const harder = { kind: 'born_mayer', hardnessA: { low: 0.3, high: 0.3 } } as const;
+    expect(isSameContent(content, { ...content, model: { ...model, repulsion: harder } })).toBe(
+      false,
+    );
   });
 });

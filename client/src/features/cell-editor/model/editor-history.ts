@@ -1,10 +1,19 @@
 import type { CellDefinition, EvaluationMethod } from '#common/schemas/cell';
+import type { EnergeticModel } from '#common/schemas/energetics';
 
-/** What is edited: the cell and how it is evaluated. */
+/** What is edited: the cell, how it is evaluated and what its energetics need beyond it. */
 export interface EditorContent {
   readonly cell: CellDefinition;
   readonly method: EvaluationMethod;
+  readonly model: EnergeticModel;
 }
+
+/** The editable part of a draft or a revision. */
+export const contentOf = ({ cell, method, model }: EditorContent): EditorContent => ({
+  cell,
+  method,
+  model,
+});
 
 /** Content with the way back and the way forth. */
 export interface EditorHistory {
@@ -68,13 +77,26 @@ export function redo(history: EditorHistory): EditorHistory {
     : { past: [...history.past, history.present], present: next, future, last: null };
 }
 
-/** Whether two contents say the same; both are plain JSON with a fixed order of keys. */
+/** Plain JSON with its keys in order. */
+function sorted(value: unknown): unknown {
+  if (Array.isArray(value)) {
+    return value.map(sorted);
+  }
+  if (typeof value !== 'object' || value === null) {
+    return value;
+  }
+  const entries = Object.entries(value).sort(([a], [b]) => (a < b ? -1 : 1));
+  return entries.map(([key, one]) => [key, sorted(one)]);
+}
+
+/** Whether two contents say the same, in whatever order their keys stand. */
 export function isSameContent(one: EditorContent, other: EditorContent): boolean {
   return (
     one === other ||
     (JSON.stringify(canonical(one.cell)) === JSON.stringify(canonical(other.cell)) &&
       one.method.toleranceRelative === other.method.toleranceRelative &&
-      one.method.uniformBackground === other.method.uniformBackground)
+      one.method.uniformBackground === other.method.uniformBackground &&
+      JSON.stringify(sorted(one.model)) === JSON.stringify(sorted(other.model)))
   );
 }
 

@@ -5,6 +5,7 @@ import {
   type UnsavedCopy,
 } from '#client/features/cell-editor/model/draft-keeper.ts';
 import {
+  contentOf,
   isSameContent,
   pushEdit,
   redo,
@@ -24,7 +25,7 @@ export class EditorStore {
   constructor(draft: Draft, world: KeeperWorld, unsaved: UnsavedCopy | null) {
     this.now = world.now;
     this.keeper = new DraftKeeper(draft, world);
-    this.history = startHistory({ cell: draft.cell, method: draft.method });
+    this.history = startHistory(contentOf(draft));
     if (unsaved === null) {
       return;
     }
@@ -68,7 +69,7 @@ export class EditorStore {
   }
 
   private show(draft: Draft): boolean {
-    const content = { cell: draft.cell, method: draft.method };
+    const content = contentOf(draft);
     if (isSameContent(content, this.history.present)) {
       return false;
     }

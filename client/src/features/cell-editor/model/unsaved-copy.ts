@@ -1,11 +1,12 @@
 import { z } from 'zod';
 
 import { cellDefinition, evaluationMethod } from '#common/schemas/cell';
+import { energeticModel } from '#common/schemas/energetics';
 import type { UnsavedCopy } from '#client/features/cell-editor/model/draft-keeper.ts';
 
 const unsavedCopy = z.object({
   etag: z.string(),
-  content: z.object({ cell: cellDefinition, method: evaluationMethod }),
+  content: z.object({ cell: cellDefinition, method: evaluationMethod, model: energeticModel }),
 });
 
 const keyOf = (latticeId: string): string => `holdfast.unsaved.${latticeId}`;

@@ -7,6 +7,9 @@ import { formatSceneView, parseSceneView, type SceneView } from '#client/scene/m
 const sectionKeys = ['energy', 'cell', 'sites', 'remarks', 'history'] as const;
 export type SectionKey = (typeof sectionKeys)[number];
 
+/** Sections that follow from the cell and its model, in their order. */
+export const computedSections: readonly SectionKey[] = ['energy'];
+
 /** What one looks at and how: lives in the address, so that a reload or a sent link shows the same. */
 export interface LatticeAddress {
   readonly section: SectionKey;

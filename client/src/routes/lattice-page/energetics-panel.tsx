@@ -1,0 +1,40 @@
+import type { JSX } from 'react';
+
+import type { ResolvedCell } from '#common/physics/resolved-cell';
+import type { CellDefinition, EvaluationMethod } from '#common/schemas/cell';
+import type { EnergeticModel } from '#common/schemas/energetics';
+import type { EvaluationResult } from '#common/schemas/evaluation';
+import type {
+  LatticeAddress,
+  SectionKey,
+} from '#client/features/lattices/hooks/use-lattice-address.ts';
+
+/** What the sections about energetics work from, beside the cell in numbers and its evaluation. */
+export interface EnergeticsInput {
+  /** Slug of the workspace; null for a link holder, who belongs to none. */
+  readonly workspace: string | null;
+  readonly content: {
+    readonly cell: CellDefinition;
+    readonly method: EvaluationMethod;
+    readonly model: EnergeticModel;
+  };
+  /** Changes the model as one step that can be undone; null where it may only be read. */
+  readonly onModel: ((model: EnergeticModel, field: string | null) => void) | null;
+}
+
+export interface EnergeticsPanelProps {
+  readonly section: SectionKey;
+  readonly cell: ResolvedCell;
+  readonly result: EvaluationResult;
+  readonly energetics: EnergeticsInput;
+  readonly address: LatticeAddress;
+  readonly update: (change: Partial<LatticeAddress>) => void;
+}
+
+/** The section's panel, or null when the section is not about energetics. */
+export function energeticsPanel({ section }: EnergeticsPanelProps): JSX.Element | null {
+  switch (section) {
+    default:
+      return null;
+  }
+}
