@@ -3,7 +3,7 @@ import { randomBytes } from 'node:crypto';
 import net from 'node:net';
 import { fileURLToPath } from 'node:url';
 
-import { Client } from 'pg';
+import { administer, dropDatabase, testServerUrl } from '../helpers/administer.js';
 
 const entry = fileURLToPath(new URL('../../dist/server/src/main.js', import.meta.url));
 
@@ -29,22 +29,12 @@ function freePort(): Promise<number> {
   });
 }
 
-async function administer(statement: string): Promise<void> {
-  const client = new Client({ connectionString: process.env['HOLDFAST_TEST_DATABASE_URL'] });
-  await client.connect();
-  try {
-    await client.query(statement);
-  } finally {
-    await client.end();
-  }
-}
-
 function launch(
   port: number,
   database: string,
   env: Record<string, string>,
 ): Promise<ChildProcess> {
-  const url = new URL(process.env['HOLDFAST_TEST_DATABASE_URL'] ?? '');
+  const url = testServerUrl();
   url.pathname = `/${database}`;
   const server = spawn(process.execPath, [entry], {
     env: {
@@ -98,7 +88,7 @@ export async function startProduct(env: Record<string, string> = {}): Promise<Pr
     },
     stop: async () => {
       await ended(server, 'SIGTERM');
-      await administer(`drop database if exists ${database} with (force)`);
+      await dropDatabase(database);
     },
   };
 }

@@ -1,9 +1,11 @@
 import { randomBytes } from 'node:crypto';
 
-import { Client, Pool } from 'pg';
+import { Pool } from 'pg';
 
 import { openDatabase, type Database } from '#server/database/database';
 import { migrateDatabase } from '#server/database/migrate';
+
+import { administer, dropDatabase, testServerUrl } from './administer.js';
 
 /** A database of its own for one test file. */
 export interface TestDatabase {
@@ -14,29 +16,11 @@ export interface TestDatabase {
   drop(): Promise<void>;
 }
 
-function serverUrl(): URL {
-  const text = process.env['HOLDFAST_TEST_DATABASE_URL'];
-  if (text === undefined || text === '') {
-    throw new Error('Set HOLDFAST_TEST_DATABASE_URL, or run the tests by npm test, which does.');
-  }
-  return new URL(text);
-}
-
-async function administer(statement: string): Promise<void> {
-  const client = new Client({ connectionString: serverUrl().href });
-  await client.connect();
-  try {
-    await client.query(statement);
-  } finally {
-    await client.end();
-  }
-}
-
 /** Makes an empty database. */
 export async function createEmptyDatabase(): Promise<TestDatabase> {
   const name = `holdfast_test_${randomBytes(8).toString('hex')}`;
   await administer(`create database ${name}`);
-  const url = serverUrl();
+  const url = testServerUrl();
   url.pathname = `/${name}`;
   const pool = new Pool({ connectionString: url.href, max: 12 });
   // The server may close idle connections when the database is dropped.
@@ -47,7 +31,7 @@ export async function createEmptyDatabase(): Promise<TestDatabase> {
     db: openDatabase(pool),
     drop: async () => {
       await pool.end();
-      await administer(`drop database if exists ${name} with (force)`);
+      await dropDatabase(name);
     },
   };
 }
