@@ -84,9 +84,8 @@ describe.each<Graphics>(['none', 'webgl'])('the main job with graphics: %s', (gr
 
     await page.getByRole('row', { name: /3\.648/ }).click();
     await expect.poll(() => page.url()).toMatch(/row=/);
-    expect(await page.getByRole('row', { name: /3\.648/ }).getAttribute('aria-selected')).toBe(
-      'true',
-    );
+    // The address changes before the page has been drawn anew.
+    await page.getByRole('row', { name: /3\.648/, selected: true }).waitFor();
 
     await page.getByRole('button', { name: 'Save revision' }).click();
     await page.getByRole('dialog').getByRole('textbox').fill('Measured edge');
