@@ -1,4 +1,5 @@
 import { blend, darken, type RasterBuffer } from './raster-buffer.ts';
+import { fullCover, stampFor } from './raster-stamps.ts';
 import { ballTableFor, type BallTable } from './raster-tones.ts';
 
 /** A ball on the screen: pixels, and Å for the depth. */
@@ -15,10 +16,83 @@ function clip(value: number, size: number): number {
   return value < 0 ? 0 : value > size - 1 ? size - 1 : value;
 }
 
-/**
- * Draws one row of a ball. Pixels well inside take the table's tone as it is; those on the rim
- * are blended by how much of them the ball covers.
- */
+/** Balls up to this many pixels radius are drawn from stamps. */
+const stampLimitPx = 26;
+
+/** Lays a ball's colour over a pixel on its rim, by how much of the pixel the ball covers. */
+function paintRim(
+  { pixels, depths }: RasterBuffer,
+  at: number,
+  colour: number,
+  cover: number,
+  depth: number,
+): void {
+  pixels[at] = blend(pixels[at]!, colour, cover);
+  if (cover > 128) {
+    depths[at] = depth;
+  }
+}
+
+/** A small ball: tones, heights and cover of its pixels are known, only the depth is compared. */
+function drawStamp(buffer: RasterBuffer, ball: ScreenBall, palette: Uint32Array): void {
+  const { pixels, depths, width, height } = buffer;
+  const { depthA, radiusA } = ball;
+  const stamp = stampFor(ball.radiusPx, ball.x, ball.y);
+  const { size, tones, heights, covers, firsts, lasts } = stamp;
+  const left = Math.floor(ball.x) - stamp.middle;
+  const top = Math.floor(ball.y) - stamp.middle;
+  const soft = radiusA / ball.radiusPx;
+  const softness = 256 / soft;
+  const lastRow = Math.min(size - 1, height - 1 - top);
+  for (let row = Math.max(0, -top); row <= lastRow; row += 1) {
+    const first = Math.max(firsts[row]!, -left);
+    const last = Math.min(lasts[row]!, width - 1 - left);
+    let at = (top + row) * width + left + first;
+    for (let entry = row * size + first; entry <= row * size + last; entry += 1, at += 1) {
+      const depth = depthA - heights[entry]! * radiusA;
+      const ahead = depths[at]! - depth;
+      if (ahead <= 0) {
+        continue;
+      }
+      const colour = palette[tones[entry]!]!;
+      const cover = covers[entry]!;
+      if (cover === fullCover) {
+        // Where surfaces meet within a pixel they share it.
+        pixels[at] = ahead < soft ? blend(pixels[at]!, colour, (ahead * softness) | 0) : colour;
+        depths[at] = depth;
+      } else {
+        paintRim(buffer, at, colour, cover, depth);
+      }
+    }
+  }
+}
+
+/** Pixels of one row from `first` to `last` that may lie on the rim of a large ball. */
+function drawRimSpan(
+  buffer: RasterBuffer,
+  { x: cx, radiusPx: r, depthA, radiusA }: ScreenBall,
+  { size, tones, heights }: BallTable,
+  palette: Uint32Array,
+  y: number,
+  dy: number,
+  first: number,
+  last: number,
+): void {
+  const scale = size / 2 / r;
+  const row = clip(Math.floor(size / 2 + dy * scale), size) * size;
+  for (let x = first; x <= last; x += 1) {
+    const dx = x + 0.5 - cx;
+    const at = y * buffer.width + x;
+    const entry = row + clip((size / 2 + dx * scale) | 0, size);
+    const depth = depthA - heights[entry]! * radiusA;
+    const cover = r + 0.5 - Math.sqrt(dx * dx + dy * dy);
+    if (cover > 0 && buffer.depths[at]! > depth) {
+      paintRim(buffer, at, palette[tones[entry]!]!, cover >= 1 ? 256 : (cover * 256) | 0, depth);
+    }
+  }
+}
+
+/** One row of a large ball: well inside it takes the table's tones as they are. */
 function drawRow(
   buffer: RasterBuffer,
   ball: ScreenBall,
@@ -33,33 +107,30 @@ function drawRow(
   const reach = Math.sqrt(Math.max(0, (r + 0.5) * (r + 0.5) - dy * dy));
   const first = clip(Math.floor(cx - reach), width);
   const last = clip(Math.ceil(cx + reach) - 1, width);
-  const innerSquared = r > 0.7 ? (r - 0.7) * (r - 0.7) : 0;
+  const inside = (r - 0.7) * (r - 0.7) - dy * dy;
+  if (inside <= 0) {
+    drawRimSpan(buffer, ball, table, palette, y, dy, first, last);
+    return;
+  }
+  const half = Math.sqrt(inside);
+  const innerFirst = clip(Math.ceil(cx - half - 0.5), width);
+  const innerLast = clip(Math.floor(cx + half - 0.5), width);
+  drawRimSpan(buffer, ball, table, palette, y, dy, first, innerFirst - 1);
+  drawRimSpan(buffer, ball, table, palette, y, dy, innerLast + 1, last);
   const scale = size / 2 / r;
   const soft = radiusA / r;
+  const softness = 256 / soft;
   const row = clip(Math.floor(size / 2 + dy * scale), size) * size;
-  for (let x = first; x <= last; x += 1) {
-    const dx = x + 0.5 - cx;
-    const at = y * width + x;
-    const entry = row + clip((size / 2 + dx * scale) | 0, size);
+  let at = y * width + innerFirst;
+  let column = size / 2 + (innerFirst + 0.5 - cx) * scale;
+  for (let x = innerFirst; x <= innerLast; x += 1, at += 1, column += scale) {
+    const entry = row + (column | 0);
     const depth = depthA - heights[entry]! * radiusA;
     const ahead = depths[at]! - depth;
-    if (ahead <= 0) {
-      continue;
-    }
-    const squared = dx * dx + dy * dy;
-    const colour = palette[tones[entry]!]!;
-    if (squared <= innerSquared) {
-      // Where surfaces meet within a pixel they share it.
-      pixels[at] = ahead < soft ? blend(pixels[at]!, colour, ((ahead / soft) * 256) | 0) : colour;
+    if (ahead > 0) {
+      const colour = palette[tones[entry]!]!;
+      pixels[at] = ahead < soft ? blend(pixels[at]!, colour, (ahead * softness) | 0) : colour;
       depths[at] = depth;
-      continue;
-    }
-    const cover = r + 0.5 - Math.sqrt(squared);
-    if (cover > 0) {
-      pixels[at] = blend(pixels[at]!, colour, cover >= 1 ? 256 : (cover * 256) | 0);
-      if (cover > 0.5) {
-        depths[at] = depth;
-      }
     }
   }
 }
@@ -67,6 +138,10 @@ function drawRow(
 export function drawBall(buffer: RasterBuffer, ball: ScreenBall, palette: Uint32Array): void {
   const { radiusPx: r, y: cy, x: cx } = ball;
   if (r < 0.3 || cx + r < 0 || cx - r > buffer.width) {
+    return;
+  }
+  if (r < stampLimitPx) {
+    drawStamp(buffer, ball, palette);
     return;
   }
   const table = ballTableFor(r);
