@@ -17,3 +17,15 @@ export const AVOGADRO_PER_MOL = 6.02214076e23;
 
 /** 1 g mol⁻¹ Å⁻³ in g cm⁻³: 10²⁴ / N_A. */
 export const GRAM_PER_MOL_CUBIC_ANGSTROM_IN_GRAM_PER_CM3 = 1e24 / AVOGADRO_PER_MOL;
+
+/** Gas constant R = N_A k_B in J mol⁻¹ K⁻¹ (exact SI). */
+export const GAS_CONSTANT_J_PER_MOL_K = 8.31446261815324;
+
+/** Elementary charge in C, and so 1 eV in J (exact SI). */
+export const ELEMENTARY_CHARGE_C = 1.602176634e-19;
+
+/** Atomic mass constant u in kg, CODATA 2022: 1.660 539 068 92(52) × 10⁻²⁷. */
+export const ATOMIC_MASS_KG = 1.66053906892e-27;
+
+/** Speed of light in m s⁻¹ (exact SI). */
+export const SPEED_OF_LIGHT_M_PER_S = 299_792_458;

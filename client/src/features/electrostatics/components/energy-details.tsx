@@ -2,8 +2,8 @@ import type { JSX } from 'react';
 
 import type { EvaluationResult } from '#common/schemas/evaluation';
 import { formatFixed } from '#common/units/format';
+import { Disclosure } from '#client/components/disclosure.tsx';
 import { CertificateList } from '#client/features/electrostatics/components/certificate.tsx';
-import { Disclosure } from '#client/features/electrostatics/components/disclosure.tsx';
 import { StressTable } from '#client/features/electrostatics/components/stress-table.tsx';
 import { SublatticeTable } from '#client/features/electrostatics/components/sublattice-table.tsx';
 
