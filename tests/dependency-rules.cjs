@@ -59,6 +59,15 @@ module.exports = {
         pathNot: '^server/src/electrostatics/engine/index\\.ts$',
       },
     },
+    {
+      name: 'dynamics-by-its-door',
+      severity: 'error',
+      from: { path: '^server/src/', pathNot: '^server/src/energetics/engine/' },
+      to: {
+        path: '^server/src/energetics/engine/',
+        pathNot: '^server/src/energetics/engine/index\\.ts$',
+      },
+    },
   ],
   options: {
     tsPreCompilationDeps: true,

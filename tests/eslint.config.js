@@ -105,6 +105,7 @@ export default tseslint.config(
   {
     files: [
       'server/src/electrostatics/engine/**/*.ts',
+      'server/src/energetics/engine/**/*.ts',
       'server/src/cif/format/**/*.ts',
       'server/src/electrostatics/results/**/*.ts',
     ],

@@ -12,6 +12,8 @@ import { truncation, planSplitting, type Allowances } from './plan.js';
 import { prepareCell } from './prepare.js';
 import { sumOnce } from './sum.js';
 
+export { erfc } from './erfc.js';
+
 /** Named in every result, and part of its content hash: a change of digits needs a new one. */
 export const engineVersion = 'ewald-gaussian-2';
 
