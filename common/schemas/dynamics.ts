@@ -12,6 +12,9 @@ const triple = z.tuple([finite, finite, finite]);
 const six = z.array(finite).length(6);
 const sixBySix = z.array(six).length(6);
 
+/** A cell relaxed under the model before its constants or modes were taken, or as it stands. */
+const geometry = z.enum(['as_given', 'relaxed']);
+
 /** What the pair model left out and where it came from. */
 const pairModelNote = z.object({
   /** In words: which form, which constants, how they were fitted. */
@@ -121,6 +124,9 @@ export const stabilityCriterion = z.object({
 
 export const elasticResult = z.object({
   engine: z.string(),
+  geometry,
+  /** How the relaxation before it ended; null where none was asked for. */
+  relaxationEnded: relaxationEnd.nullable(),
   /** Stiffness with the ions relaxed, symmetric. */
   stiffnessGpa: sixBySix,
   /** The same with the ions held at their fractional coordinates. */
@@ -183,7 +189,7 @@ export const vibrationMode = z.object({
   isAcoustic: z.boolean(),
   /** Modes of one frequency carry one number. */
   level: z.number().int(),
-  /** |Σ Z_i e_i/√m_i| in e/√u: how strongly the mode carries a dipole. */
+  /** |Σ Z_i e_i/√m_i| of a primitive cell in e/√u: how strongly the mode carries a dipole. */
   dipoleStrength: finite,
   /** Real displacements per site, Cartesian; the longest arrow has length 1. */
   displacements: z.array(triple),
@@ -192,8 +198,14 @@ export type VibrationMode = z.infer<typeof vibrationMode>;
 
 export const vibrationsResult = z.object({
   engine: z.string(),
+  geometry,
+  /** How the relaxation before it ended; null where none was asked for. */
+  relaxationEnded: relaxationEnd.nullable(),
   sites: z.array(resultSite.extend({ massU: finite })),
-  /** Without the macroscopic field: transverse branches as q → 0. Ascending by ω². */
+  /**
+   * Without the macroscopic field: transverse branches as q → 0, ascending by ω². Three modes per
+   * ion of the primitive cell: those in which cells joined by a centring move alike.
+   */
   transverse: z.array(vibrationMode),
   /** With the field of waves along a direction q̂ (rigid ions of their full charges). */
   longitudinal: z.array(

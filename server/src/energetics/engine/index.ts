@@ -6,16 +6,15 @@ import { relaxCell, type RelaxHooks, type RelaxInput, type RelaxResult } from '.
 import { bornStability, type CrystalSystem, type Stability } from './stability.js';
 import { vibrationsOf, type GammaVibrations, type VibrationsInput } from './vibrations.js';
 
-export type { CellOperation, PairModelInput, PairTerm } from './contract.js';
-export type { RelaxCriteria, RelaxHooks, RelaxInput, RelaxResult } from './relax.js';
-export type { CrystalSystem } from './stability.js';
-export type { GammaMode, VibrationsInput } from './vibrations.js';
+export type { PairModelInput, PairModelResult, PairTerm } from './contract.js';
+export type { RelaxHooks, RelaxResult } from './relax.js';
+export type { GammaMode } from './vibrations.js';
 
 /** Named in every result: a change of digits needs a new one. */
 export const dynamicsEngineVersion = 'pair-dynamics-1';
 
-/** Reaches of what the numbers of a pair model mean. */
-export interface PairModelOptions {
+/** What to work out besides energy, forces and stress. */
+interface PairModelOptions {
   /** Work out force constants, internal strain and the clamped strain matrix as well. */
   readonly withSecondDerivatives?: boolean;
 }
@@ -53,7 +52,7 @@ export function relax(input: RelaxInput, hooks: RelaxHooks = {}): RelaxResult {
 }
 
 /** Elastic constants with what follows from them. */
-export interface ElasticResult extends ElasticConstants {
+interface ElasticResult extends ElasticConstants {
   readonly stability: Stability;
   /** Null where C is not positive definite. */
   readonly averages: PolycrystalAverages | null;
