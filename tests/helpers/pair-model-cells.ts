@@ -197,3 +197,28 @@ export function inverse3(m: readonly number[]): number[] {
 export function symmetric(components: ArrayLike<number>): number[] {
   return [0, 5, 4, 5, 1, 3, 4, 3, 2].map((at) => components[at]!);
 }
+
+/** The cell repeated along each axis, copy after copy. */
+export function supercell(
+  input: PairModelInput,
+  times: readonly [number, number, number],
+): PairModelInput {
+  const images: number[][] = [];
+  for (let i = 0; i < times[0]; i += 1) {
+    for (let j = 0; j < times[1]; j += 1) {
+      for (let k = 0; k < times[2]; k += 1) {
+        images.push([i, j, k]);
+      }
+    }
+  }
+  const every = <T>(values: ArrayLike<T>) => images.flatMap(() => Array.from(values));
+  return {
+    ...input,
+    vectorsA: Array.from(input.vectorsA, (value, k) => value * times[Math.floor(k / 3)]!),
+    fractional: images.flatMap((image) =>
+      Array.from(input.fractional, (x, k) => (x + image[k % 3]!) / times[k % 3]!),
+    ),
+    chargesE: every(input.chargesE),
+    speciesIndex: every(input.speciesIndex),
+  };
+}

@@ -353,7 +353,7 @@ class Relaxation {
         this.state = trial;
         return null;
       }
-      if (isTooClose && halving >= 6) {
+      if (isTooClose && halving >= 3) {
         return 'collapsed';
       }
     }
