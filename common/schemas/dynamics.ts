@@ -59,7 +59,7 @@ export const relaxationStep = z.object({
 });
 export type RelaxationStep = z.infer<typeof relaxationStep>;
 
-export const relaxationCriteria = z.object({
+const relaxationCriteria = z.object({
   /** Largest component of the force on any ion. */
   maxForceEvPerA: finite,
   /** Largest component of the stress less the pressure asked for. */
@@ -68,7 +68,6 @@ export const relaxationCriteria = z.object({
   energyChangeEvPerIon: finite,
   stepLimit: z.number().int(),
 });
-export type RelaxationCriteria = z.infer<typeof relaxationCriteria>;
 
 /** One end of a relaxation. */
 const relaxationState = z.object({

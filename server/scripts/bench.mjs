@@ -10,7 +10,11 @@ import { Advice, main } from './lib/say.mjs';
 await main(async () => {
   await ensureDebianPackages([chromiumPackage]);
   await ensureDependencies();
-  for (const file of ['tests/bench/engine.bench.ts', 'tests/bench/frames/frames.bench.ts']) {
+  for (const file of [
+    'tests/bench/engine.bench.ts',
+    'tests/bench/dynamics.bench.ts',
+    'tests/bench/frames/frames.bench.ts',
+  ]) {
     const done = await run(
       process.execPath,
       ['--import', 'tsx', '--conditions', 'holdfast', path.join(root, file)],

@@ -222,3 +222,28 @@ export function supercell(
     speciesIndex: every(input.speciesIndex),
   };
 }
+
+/** Rock salt of nearest distance 2.85 Å, a box of whole distances, every ion moved a little. */
+export function shakenRockSalt(size: readonly [number, number, number]): PairModelInput {
+  const places: number[][] = [];
+  for (let x = 0; x < size[0]; x += 1) {
+    for (let y = 0; y < size[1]; y += 1) {
+      for (let z = 0; z < size[2]; z += 1) {
+        places.push([x, y, z]);
+      }
+    }
+  }
+  const kinds = places.map(([x, y, z]) => (x! + y! + z!) % 2);
+  const box = size.map((n) => 2.85 * n) as [number, number, number];
+  return shaken(
+    {
+      vectorsA: [box[0], 0, 0, 0, box[1], 0, 0, 0, box[2]],
+      fractional: places.flatMap((place) => place.map((at, k) => at / size[k]!)),
+      chargesE: kinds.map((kind) => (kind === 0 ? 1 : -1)),
+      speciesIndex: kinds,
+      pairs: allPairs,
+      cutoffA: 12,
+    },
+    0.08,
+  );
+}

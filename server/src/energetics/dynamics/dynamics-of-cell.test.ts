@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 
+import { applyOperation } from '#common/physics/symmetry-operation';
 import { elasticResult, relaxationResult, vibrationsResult } from '#common/schemas/dynamics';
 import type { PairPotential } from '#common/schemas/energetics';
 import { operationsOf } from '#server/symmetry/space-groups';
@@ -143,6 +144,81 @@ describe('sodium chloride', () => {
     expect(result.averages).toBeNull();
     const stop = relaxationOfCell(subject, { shouldStop: () => true });
     expect(stop.ended).toBe('stopped');
+  });
+});
+
+describe('corundum', () => {
+  // R −3 c on hexagonal axes, Hall number 460; constants made up.
+  const operations = operationsOf(460);
+  const orbit = (x: readonly [number, number, number]) => {
+    const places: [number, number, number][] = [];
+    for (const operation of operations) {
+      const at = applyOperation(operation, x);
+      const isNew = places.every((place) =>
+        place.some((value, k) => {
+          const off = value - at[k]!;
+          return Math.abs(off - Math.round(off)) > 1e-6;
+        }),
+      );
+      if (isNew) {
+        places.push(at);
+      }
+    }
+    return places;
+  };
+  const subject: DynamicsSubject = {
+    cell: resolvedCell({ ...cubic(4.76), cA: 12.99, gammaDeg: 120 }, [
+      ...orbit([0, 0, 0.352]).map((at) => ({ element: 'Al', chargeE: 3, row: 0, at })),
+      ...orbit([0.306, 0, 0.25]).map((at) => ({ element: 'O', chargeE: -2, row: 1, at })),
+    ]),
+    potentials: {
+      pairs: [pair('Al+3', 'O-2', 1500, 0.3), pair('O-2', 'O-2', 20000, 0.15)],
+      cutoffA: 12,
+      derivation: 'typed by hand',
+    },
+    operations,
+  };
+
+  it('keeps its group and has the elastic constants of a trigonal crystal', () => {
+    const relaxed = relaxationResult.parse(relaxationOfCell(subject));
+    expect(relaxed.ended).toBe('converged');
+    expect(relaxed.sites).toHaveLength(30);
+    expect(relaxed.after.gammaDeg).toBeCloseTo(120, 10);
+    expect(relaxed.symmetryDeviationA).toBeLessThanOrEqual(1e-12);
+    const { stiffnessGpa: c, stability } = elasticOfCell(subject, {
+      system: 'trigonal',
+      isRelaxedFirst: true,
+    });
+    // The shape of class −3m with a along x: International Tables D, table 1.1.4.9 (from memory).
+    const at = (i: number, j: number) => c[i - 1]![j - 1]!;
+    expect(Math.abs(at(1, 4))).toBeGreaterThan(1);
+    expect(at(2, 4)).toBeCloseTo(-at(1, 4), 6);
+    expect(at(5, 6)).toBeCloseTo(at(1, 4), 6);
+    expect(at(6, 6)).toBeCloseTo((at(1, 1) - at(1, 2)) / 2, 6);
+    expect(Math.abs(at(1, 5))).toBeLessThanOrEqual(1e-6);
+    expect(stability.criteria).toHaveLength(4);
+    expect(stability.isStable).toBe(true);
+  });
+
+  it('has 30 modes, of which two polar levels rise along c', () => {
+    const masses = { Al: 26.98, O: 16 };
+    const { transverse, longitudinal } = vibrationsOfCell(subject, {
+      massOf: (element) => masses[element as 'Al' | 'O'],
+      isRelaxedFirst: true,
+    });
+    expect(transverse).toHaveLength(30);
+    // Γ = 2A₁g + 3A₂g + 5E_g + 2A₁u + 3A₂u + 5E_u, one A₂u and one E_u of them acoustic
+    // (S. P. S. Porto, R. S. Krishnan, J. Chem. Phys. 47 (1967) 1009, from memory).
+    const levels = new Map<number, number>();
+    transverse
+      .filter(({ isAcoustic }) => !isAcoustic)
+      .forEach(({ level }) => levels.set(level, (levels.get(level) ?? 0) + 1));
+    const sizes = [...levels.values()];
+    expect(sizes.filter((size) => size === 1)).toHaveLength(2 + 3 + 2 + 2);
+    expect(sizes.filter((size) => size === 2)).toHaveLength(5 + 4);
+    const along = longitudinal.find(({ name }) => name === 'c*')!.modes;
+    const total = (modes: typeof along) => modes.reduce((sum, m) => sum + m.frequencyThz ** 2, 0);
+    expect(total(along)).toBeGreaterThan(total(transverse));
   });
 });
 

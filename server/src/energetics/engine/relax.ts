@@ -35,7 +35,10 @@ export interface RelaxInput extends PairModelInput {
   /** Move ions only. */
   readonly isCellFixed?: boolean;
   readonly criteria?: Partial<RelaxCriteria>;
-  /** Closer than this two ions count as fallen together; 0.5 Å if left out. */
+  /**
+   * Closer than this two ions count as fallen together; if left out, 0.35 of the shortest distance
+   * of the cell as given, and at least 0.5 Å.
+   */
   readonly guardDistanceA?: number;
 }
 
@@ -78,6 +81,10 @@ const sufficientPart = 1e-4;
 
 /** Halvings of a step before the search gives up. */
 const longestSearch = 30;
+
+/** Ions of any charge are farther apart than this, and no relaxation brings them this much closer. */
+const smallestGuardA = 0.5;
+const guardPart = 0.35;
 
 /** A cell this many times larger than it began has come apart. */
 const dissolvedFactor = 8;
@@ -147,7 +154,6 @@ class Relaxation {
   ) {
     this.criteria = { ...defaultRelaxCriteria, ...input.criteria };
     this.pressure = input.pressureEvPerA3 ?? 0;
-    this.guardA = input.guardDistanceA ?? 0.5;
     this.operations = placeOperations(
       input,
       input.operations.length > 0 ? input.operations : [unit],
@@ -158,6 +164,8 @@ class Relaxation {
     const fractional = symmetrisedSites(input.fractional, this.operations);
     this.state = this.evaluate({ ...input, fractional });
     this.before = this.state.result;
+    this.guardA =
+      input.guardDistanceA ?? Math.max(smallestGuardA, guardPart * this.before.shortestDistanceA);
   }
 
   run(): RelaxEnd {
