@@ -7,6 +7,9 @@ import { z } from 'zod';
  * as stored: a along x, b in the xy plane.
  */
 
+/** Sizes the API and the computations share. */
+export const dynamicsLimits = { sites: 256 } as const;
+
 const finite = z.number().finite();
 const triple = z.tuple([finite, finite, finite]);
 const six = z.array(finite).length(6);

@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest';
 
+import { Problem } from '#common/errors/problem';
+import type { ResolvedSite } from '#common/physics/resolved-cell';
 import { applyOperation } from '#common/physics/symmetry-operation';
 import { elasticResult, relaxationResult, vibrationsResult } from '#common/schemas/dynamics';
 import type { PairPotential } from '#common/schemas/energetics';
@@ -237,5 +239,66 @@ describe('a mixed site', () => {
       { massOf, isRelaxedFirst: false },
     );
     expect(result.sites[0]!.massU).toBeCloseTo(22.99 / 2, 12);
+  });
+});
+
+describe('what a pair model can’t be applied to', () => {
+  const sound = sodiumChloride(5.6, pairs);
+  const withSites = (change: (site: ResolvedSite) => ResolvedSite | null): DynamicsSubject => ({
+    ...sound,
+    cell: {
+      ...sound.cell,
+      sites: sound.cell.sites.flatMap((site) => change(site) ?? []),
+    },
+  });
+
+  it.each<[string, DynamicsSubject, string, string]>([
+    ['no sites', withSites(() => null), 'cell.no_sites', 'sites'],
+    [
+      'a charged cell',
+      withSites((site) => ({ ...site, chargeE: site.chargeE + 1 })),
+      'cell.not_neutral',
+      'sites',
+    ],
+    [
+      'ions on one place',
+      withSites((site) => ({ ...site, fractional: [0.1, 0.2, 0.3] })),
+      'cell.coincident_sites',
+      'sites.0.x',
+    ],
+    [
+      'a pair given twice',
+      {
+        ...sound,
+        potentials: { ...sound.potentials, pairs: [...pairs, pair('Cl-1', 'Na+1', 1, 1)] },
+      },
+      'request.invalid',
+      'model.repulsion.pairs.2.speciesB',
+    ],
+    [
+      'too large a cell',
+      {
+        ...sound,
+        cell: { ...sound.cell, sites: new Array<ResolvedSite>(257).fill(sound.cell.sites[0]!) },
+      },
+      'cell.too_many_sites',
+      'sites',
+    ],
+  ])('%s', (_name, subject, code, field) => {
+    const compute = [
+      () => relaxationOfCell(subject),
+      () => elasticOfCell(subject, { system: 'cubic', isRelaxedFirst: false }),
+      () => vibrationsOfCell(subject, { massOf, isRelaxedFirst: false }),
+    ];
+    for (const call of compute) {
+      let problem: unknown = null;
+      try {
+        call();
+      } catch (error) {
+        problem = error;
+      }
+      expect(problem).toBeInstanceOf(Problem);
+      expect(problem).toMatchObject({ code, details: { fields: [{ code, field }] } });
+    }
   });
 });

@@ -14,7 +14,7 @@ export interface ElasticOptions {
 /**
  * Elastic constants, stability and polycrystal averages of a cell as they go over the wire, GPa.
  *
- * @throws RangeError as the engine's `elasticConstants`
+ * @throws Problem as `refuseUnfitForDynamics`
  */
 export function elasticOfCell(
   subject: DynamicsSubject,

@@ -4,6 +4,7 @@ import type { RelaxationEnd } from '#common/schemas/dynamics';
 import type { PairPotential } from '#common/schemas/energetics';
 import type { SymmetryOperation } from '#common/schemas/symmetry';
 
+import { refuseUnfitForDynamics } from './refusals.js';
 import { relax, type PairModelInput, type PairTerm } from '../engine/index.js';
 
 /** The pair potentials of a cell and where they came from. */
@@ -30,8 +31,12 @@ function pairTerms(pairs: readonly PairPotential[], keys: readonly string[]): Pa
   });
 }
 
-/** The cell as the pair model takes it, sites in the order of the resolved cell. */
+/**
+ * The cell as the pair model takes it, sites in the order of the resolved cell.
+ * @throws Problem where a pair model can't be applied; see `refuseUnfitForDynamics`
+ */
 export function pairModelInput({ cell, potentials }: DynamicsSubject): PairModelInput {
+  refuseUnfitForDynamics(cell, potentials.pairs);
   const { keys, indexOfSite } = speciesOfCell(cell);
   return {
     vectorsA: cell.vectorsA,

@@ -78,7 +78,7 @@ function sitesOf(subject: DynamicsSubject, vectorsA: readonly number[], after: F
  * Relaxes a cell under its pair potentials, keeping its operations; the result as it goes over the
  * wire. Energies in eV, lengths in Å.
  *
- * @throws RangeError as the engine's `relax`: callers refuse charged cells and coincident ions first
+ * @throws Problem as `refuseUnfitForDynamics`; RangeError if an operation doesn't fit the sites
  */
 export function relaxationOfCell(
   subject: DynamicsSubject,

@@ -26,7 +26,7 @@ function massesOf({ cell }: DynamicsSubject, massOf: (element: string) => number
 /**
  * Vibrations at Γ of a cell as they go over the wire.
  *
- * @throws RangeError as the engine's `vibrationsAtGamma`
+ * @throws Problem as `refuseUnfitForDynamics`
  */
 export function vibrationsOfCell(
   subject: DynamicsSubject,
