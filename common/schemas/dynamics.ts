@@ -193,7 +193,7 @@ export const vibrationMode = z.object({
   level: z.number().int(),
   /** |Σ Z_i e_i/√m_i| of a primitive cell in e/√u: how strongly the mode carries a dipole. */
   dipoleStrength: finite,
-  /** Real displacements per site, Cartesian; the longest arrow has length 1. */
+  /** Real displacements per site, Cartesian; the longest arrow has length 1. Six decimals. */
   displacements: z.array(triple),
 });
 export type VibrationMode = z.infer<typeof vibrationMode>;

@@ -12,8 +12,12 @@ export interface VibrationsOptions {
 
 type Triple = [number, number, number];
 
+/** Arrows are for drawing: six decimals keep a result of many modes small. */
+const arrowDecimals = 6;
+
 function wireMode({ squareEvPerA2U: _square, displacements, ...mode }: GammaMode): VibrationMode {
-  return { ...mode, displacements: rowsOf(displacements, 3) as Triple[] };
+  const rounded = displacements.map((x) => Number(x.toFixed(arrowDecimals)) + 0);
+  return { ...mode, displacements: rowsOf(rounded, 3) as Triple[] };
 }
 
 /** Mean mass of a site: Σ occupancy·mass. */
