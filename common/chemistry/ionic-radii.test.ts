@@ -71,8 +71,10 @@ describe('ionicRadiusA', () => {
   ])('gives %s %i in coordination %i', (element, charge, coordination, radiusA) => {
     expect(ionicRadiusA(element, charge, coordination)).toEqual({
       radiusA,
+      value: radiusA,
       coordination,
       source: 'Shannon (1976) Acta Cryst. A32, 751',
+      status: 'single-source',
     });
   });
 

@@ -1,4 +1,11 @@
 import { ionicRadiusData } from '#common/chemistry/ionic-radius-data';
+import {
+  ionKey,
+  noOverrides,
+  ownOr,
+  type DataOverrides,
+  type Sourced,
+} from '#common/chemistry/sourced';
 
 /** One entry of the table of effective ionic radii. */
 export interface IonicRadiusRow {
@@ -11,12 +18,11 @@ export interface IonicRadiusRow {
   readonly radiusA: number;
 }
 
-/** A radius and where it comes from. */
-export interface IonicRadius {
+/** A radius in Å (`value`, and under its own name `radiusA`) and where it comes from. */
+export interface IonicRadius extends Sourced {
   readonly radiusA: number;
   /** Coordination number the radius was tabulated for. */
   readonly coordination: number;
-  readonly source: string;
 }
 
 const shannon = 'Shannon (1976) Acta Cryst. A32, 751';
@@ -68,12 +74,39 @@ function stateRank(state: string, spin: SpinState | undefined): number {
   return rank < 0 ? 3 : rank;
 }
 
+/** The key of a row: `radius:Na+1:6`, `radius:Fe+2:6:lowspin`. */
+export function radiusKey({
+  element,
+  charge,
+  coordination,
+  state,
+}: Omit<IonicRadiusRow, 'radiusA'>): string {
+  const place = `radius:${ionKey(element, charge)}:${coordination}`;
+  return state === '' ? place : `${place}:${state}`;
+}
+
+/** The rows of an ion, those that a workspace adds to the table's among them. */
+function rowsOf(element: string, charge: number, overrides: DataOverrides): IonicRadiusRow[] {
+  const rows = byIon.get(`${element}${charge}`) ?? [];
+  const known = new Set(rows.map(radiusKey));
+  const ion = `radius:${ionKey(element, charge)}:`;
+  const own = [...overrides].flatMap(([key, { value }]): IonicRadiusRow[] => {
+    if (!key.startsWith(ion) || known.has(key)) {
+      return [];
+    }
+    const [coordination = '', state = ''] = key.slice(ion.length).split(':');
+    return [{ element, charge, coordination: Number(coordination), state, radiusA: value }];
+  });
+  return [...rows, ...own];
+}
+
 /**
  * Effective ionic radius of an ion in Å.
  *
  * @param coordination wanted coordination number (6 when left out); where the table has none for it,
  *   the nearest tabulated one is taken (the lower of two equally near), and the answer says which
  * @param spin wanted spin state; high where the table tells them apart and none is given
+ * @param overrides the workspace's own radii, which count as rows of the table
  * @returns null for an ion the table doesn't have
  */
 export function ionicRadiusA(
@@ -81,17 +114,20 @@ export function ionicRadiusA(
   charge: number,
   coordination = 6,
   spin?: SpinState,
+  overrides: DataOverrides = noOverrides,
 ): IonicRadius | null {
-  const rows = byIon.get(`${element}${charge}`);
-  if (rows === undefined) {
-    return null;
-  }
-  const [best] = [...rows].sort(
+  const [best] = rowsOf(element, charge, overrides).sort(
     (a, b) =>
       Math.abs(a.coordination - coordination) - Math.abs(b.coordination - coordination) ||
+      a.coordination - b.coordination ||
       stateRank(a.state, spin) - stateRank(b.state, spin),
   );
-  return { radiusA: best!.radiusA, coordination: best!.coordination, source: shannon };
+  if (best === undefined) {
+    return null;
+  }
+  const shipped: Sourced = { value: best.radiusA, source: shannon, status: 'single-source' };
+  const found = ownOr(overrides, radiusKey(best), shipped) ?? shipped;
+  return { ...found, radiusA: found.value, coordination: best.coordination };
 }
 
 /** Radius drawn for an ion the table doesn't have; a drawing aid, no physical claim. */
