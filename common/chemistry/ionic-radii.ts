@@ -85,6 +85,16 @@ export function radiusKey({
   return state === '' ? place : `${place}:${state}`;
 }
 
+const byKey = new Map(ionicRadii.map((row) => [radiusKey(row), row]));
+
+/** The tabulated radius of exactly this key, Å; the table's own row and no other. */
+export function shippedRadius(key: string): Sourced | null {
+  const row = byKey.get(key);
+  return row === undefined
+    ? null
+    : { value: row.radiusA, source: shannon, status: 'single-source' };
+}
+
 /** The rows of an ion, those that a workspace adds to the table's among them. */
 function rowsOf(element: string, charge: number, overrides: DataOverrides): IonicRadiusRow[] {
   const rows = byIon.get(`${element}${charge}`) ?? [];

@@ -81,6 +81,14 @@ export const errorCodes = {
   'cell.no_charges': [422, 'Every charge is zero, so there is nothing to sum.'],
   'cell.too_many_sites': [422, 'The cell has more sites than this server takes.'],
 
+  'data.key': [
+    422,
+    'There is no such quantity. Keys read mass:Na, ionisation:Na:1, radius:Na+1:6 …',
+  ],
+  'data.value': [422, 'The value lies outside of what the quantity can be.'],
+  'data.not_found': [404, 'The workspace has no value of its own here.'],
+  'data.too_many': [422, 'The workspace has as many values of its own as it may.'],
+
   'file.unreadable': [422, 'The file can’t be read.'],
   'cif.syntax': [422, 'The CIF can’t be read.'],
   'cif.no_structure': [422, 'The CIF holds no structure.'],

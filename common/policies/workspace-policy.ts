@@ -31,6 +31,7 @@ export const workspaceActions = [
   'share.list',
   'share.create',
   'share.revoke',
+  'data.override',
 ] as const;
 export type WorkspaceAction = (typeof workspaceActions)[number];
 
@@ -77,6 +78,7 @@ const actionsByRole: Readonly<Record<Role, ReadonlySet<WorkspaceAction>>> = {
     'share.list',
     'share.create',
     'share.revoke',
+    'data.override',
   ]),
   reviewer: new Set<WorkspaceAction>([
     ...reading,

@@ -17,6 +17,7 @@ import { ReviewModule } from '#server/review/review.module';
 import { SharingModule } from '#server/sharing/sharing.module';
 import { SymmetryModule } from '#server/symmetry/symmetry.module';
 import { UsersModule } from '#server/users/users.module';
+import { DataValuesModule } from '#server/workspaces/data-values/data-values.module';
 import { WorkspacesModule } from '#server/workspaces/workspaces.module';
 
 @Module({
@@ -31,6 +32,7 @@ import { WorkspacesModule } from '#server/workspaces/workspaces.module';
     AuditModule,
     AuthModule,
     WorkspacesModule,
+    DataValuesModule,
     SymmetryModule,
     CifModule,
     PrototypesModule,

@@ -94,6 +94,25 @@ const cases: Case[] = [
     call: (agent, workspace) => agent.delete(`${workspace}/invitations/${nobody}`),
   },
   {
+    what: 'data values: read',
+    allowed: all,
+    status: 200,
+    call: (agent, workspace) => agent.get(`${workspace}/data-values`),
+  },
+  {
+    what: 'data.override: set',
+    allowed: ['owner', 'crystallographer'],
+    status: 200,
+    call: (agent, workspace) =>
+      agent.put(`${workspace}/data-values/mass:Na`).send({ value: 22.99, note: '' }),
+  },
+  {
+    what: 'data.override: restore',
+    allowed: ['owner', 'crystallographer'],
+    status: 404,
+    call: (agent, workspace) => agent.delete(`${workspace}/data-values/mass:Mg`),
+  },
+  {
     what: 'audit.read',
     allowed: owner,
     status: 200,

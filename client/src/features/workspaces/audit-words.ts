@@ -29,6 +29,8 @@ const words: Partial<Record<string, string>> = {
   'annotation.reopen': 'reopened a remark on',
   'share.create': 'shared',
   'share.revoke': 'withdrew a link to',
+  'data.override': 'set the workspace’s own value of',
+  'data.restore': 'went back to the shipped value of',
 };
 
 /** A recorded action as part of a sentence: `lattice.delete` → `deleted`. */
