@@ -19,7 +19,7 @@ afterAll(async () => {
   await empty.stop();
 });
 
-const workspacePages = ['', '/new', '/members', '/settings', '/audit'].map(
+const workspacePages = ['', '/new', '/members', '/data', '/settings', '/audit'].map(
   (page) => `/w/kiln-lane${page}`,
 );
 const sections = ['energy', 'cell', 'sites', 'remarks', 'history'];

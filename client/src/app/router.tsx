@@ -14,6 +14,7 @@ const workspacePages: RouteObject[] = [
   { path: 'new', lazy: lazyPage(() => import('#client/routes/new-lattice.tsx')) },
   { path: 'lattices/:lattice', lazy: lazyPage(() => import('#client/routes/lattice.tsx')) },
   { path: 'members', lazy: lazyPage(() => import('#client/routes/members.tsx')) },
+  { path: 'data', lazy: lazyPage(() => import('#client/routes/data-values.tsx')) },
   { path: 'settings', lazy: lazyPage(() => import('#client/routes/settings.tsx')) },
   { path: 'audit', lazy: lazyPage(() => import('#client/routes/audit.tsx')) },
 ];

@@ -1,4 +1,4 @@
-import { Check, ChevronDown, ScrollText, Settings, Users } from 'lucide-react';
+import { Check, ChevronDown, ScrollText, Settings, Table, Users } from 'lucide-react';
 import type { JSX } from 'react';
 
 import { Menu, MenuLink, MenuNote, MenuSeparator } from '#client/components/menu.tsx';
@@ -46,6 +46,9 @@ export function WorkspaceMenu(): JSX.Element | null {
             <MenuNote>You are {workspace.role} here</MenuNote>
             <MenuLink to={`${base}/members`} icon={<Users aria-hidden className="size-4" />}>
               Members
+            </MenuLink>
+            <MenuLink to={`${base}/data`} icon={<Table aria-hidden className="size-4" />}>
+              Data values
             </MenuLink>
             {can('workspace.update') && (
               <MenuLink to={`${base}/settings`} icon={<Settings aria-hidden className="size-4" />}>

@@ -1,4 +1,5 @@
 import type { JSX } from 'react';
+import { Link } from 'react-router-dom';
 
 import { NoAccess } from '#client/components/no-access.tsx';
 import { Page, PageHeader } from '#client/components/page.tsx';
@@ -13,7 +14,18 @@ export function Component(): JSX.Element {
     <Page title={`Settings of ${workspace.workspaceName}`} width="reading">
       <PageHeader title="Settings" />
       {can('workspace.update') ? (
-        <WorkspaceSettings workspace={workspace} />
+        <>
+          <WorkspaceSettings workspace={workspace} />
+          <p className="border-t border-line py-6">
+            <Link
+              to={`/w/${workspace.workspaceSlug}/data`}
+              className="underline decoration-line underline-offset-4 hover:decoration-ink"
+            >
+              Data values
+            </Link>
+            : what the computations take from tables, and values of our own in their place.
+          </p>
+        </>
       ) : (
         <NoAccess>Only an owner of {workspace.workspaceName} can change its settings.</NoAccess>
       )}
