@@ -18,6 +18,9 @@ export const AVOGADRO_PER_MOL = 6.02214076e23;
 /** 1 g mol⁻¹ Å⁻³ in g cm⁻³: 10²⁴ / N_A. */
 export const GRAM_PER_MOL_CUBIC_ANGSTROM_IN_GRAM_PER_CM3 = 1e24 / AVOGADRO_PER_MOL;
 
+/** 1 eV per particle in kJ mol⁻¹: e N_A (exact SI), 96.485 332 12. */
+export const EV_IN_KJ_PER_MOL = (1.602176634e-19 * AVOGADRO_PER_MOL) / 1000;
+
 /** Gas constant R = N_A k_B in J mol⁻¹ K⁻¹ (exact SI). */
 export const GAS_CONSTANT_J_PER_MOL_K = 8.31446261815324;
 
