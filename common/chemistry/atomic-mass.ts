@@ -15,7 +15,7 @@ function shippedMass(symbol: string): Sourced | null {
   return element.hasOnlyMassNumber
     ? {
         value,
-        source: 'mass number of a long-lived isotope: the element has no standard mass',
+        source: 'Mass number of a long-lived isotope: the element has no standard mass',
         status: 'single-source',
       }
     : { value, source: repository, status: 'verified' };

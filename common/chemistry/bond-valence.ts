@@ -60,7 +60,7 @@ export function bondValenceParameters(
   }
   const usual: Sourced =
     shipped === null
-      ? { value: usualBA, source: 'the usual 0.37 Å; common practice', status: 'from-memory' }
+      ? { value: usualBA, source: 'The usual 0.37 Å; common practice', status: 'from-memory' }
       : { ...shipped, value: usualBA };
   return { r0A, bA: ownOr(overrides, `bond-valence-b:${pair}`, usual) ?? usual };
 }

@@ -42,7 +42,7 @@ function shippedExponent(element: string, chargeE: number): Sourced | null {
     ? { value: core.exponent, source: `${pauling}: ${core.name} core`, status: 'verified' }
     : {
         value: core.exponent,
-        source: `open shell over the ${core.name} core, whose exponent is taken; common practice, no source`,
+        source: `Open shell over the ${core.name} core, whose exponent is taken; common practice, no source`,
         status: 'from-memory',
       };
 }

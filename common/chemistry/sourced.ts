@@ -24,7 +24,7 @@ export function ownOr(
   if (own === undefined) {
     return shipped;
   }
-  const source = own.note === '' ? 'own value of this workspace' : own.note;
+  const source = own.note === '' ? 'Own value of this workspace' : own.note;
   return { value: own.value, source, status: 'own' };
 }
 

@@ -133,6 +133,8 @@ describe('data values', () => {
     await user.type(subject, 'Uu+4');
     expect(within(dialog).getByText(/no such element or ion/)).toBeInTheDocument();
     await user.clear(subject);
+    await user.click(within(dialog).getByRole('button', { name: 'Save' }));
+    expect(within(dialog).getByText('Say which element or ion.')).toBeInTheDocument();
     await user.type(subject, 'U+4');
     expect(within(dialog).getByText('No value is shipped.')).toBeInTheDocument();
     await user.type(within(dialog).getByLabelText('Our value'), '13');

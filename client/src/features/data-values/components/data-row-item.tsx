@@ -17,20 +17,20 @@ function Value({ row: { facts, shipped, own } }: { row: DataRow }): JSX.Element 
   if (own === null) {
     return (
       <span className="tabular-nums">
-        {shipped === null ? '–' : valueText(shipped.value)}
+        {shipped === null ? '–' : valueText(shipped.value, facts.unit)}
         {unit}
       </span>
     );
   }
   return (
     <span className="tabular-nums">
-      <span className="font-medium">{valueText(own.value)}</span>
+      <span className="font-medium">{valueText(own.value, facts.unit)}</span>
       {unit}{' '}
       <span className="ml-1 rounded-control border border-bind px-1.5 text-small whitespace-nowrap text-bind">
         ours
       </span>
       <span className="block text-small text-soft">
-        {shipped === null ? 'none shipped' : `shipped: ${valueText(shipped.value)}`}
+        {shipped === null ? 'none shipped' : `shipped: ${valueText(shipped.value, facts.unit)}`}
       </span>
     </span>
   );

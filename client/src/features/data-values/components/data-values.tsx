@@ -68,7 +68,7 @@ function LoadedValues({
         onEdit={mayEdit ? setEdited : null}
         onClear={() => change({ search: '', kind: 'all', isOwnOnly: false })}
       />
-      {edited === 'new' && <AddValueDialog workspace={workspace} onClose={close} />}
+      {edited === 'new' && <AddValueDialog workspace={workspace} own={own} onClose={close} />}
       {edited !== null && edited !== 'new' && (
         <EditValueDialog workspace={workspace} row={edited} onClose={close} />
       )}

@@ -2,6 +2,7 @@ import { useState, type JSX } from 'react';
 
 import { shippedValue } from '#common/chemistry/data-catalogue';
 import { dataKinds, readDataKey, type DataKind } from '#common/chemistry/data-key';
+import type { OwnDataValue } from '#common/schemas/data-values';
 import { Dialog } from '#client/components/dialog.tsx';
 import { SelectField } from '#client/components/select-field.tsx';
 import { TextField } from '#client/components/text-field.tsx';
@@ -41,15 +42,26 @@ export function EditValueDialog({
 
 const kindOptions = dataKinds.map(({ kind, name }) => ({ value: kind, label: name }));
 
+function subjectFault(subject: string, isKnown: boolean, isTried: boolean): string | null {
+  if (subject.trim() === '') {
+    return isTried ? 'Say which element or ion.' : null;
+  }
+  return isKnown ? null : 'There is no such element or ion in this form.';
+}
+
 /** Gives a value to a quantity that the tables lack. */
-export function AddValueDialog({ workspace, onClose }: DialogProps): JSX.Element {
+export function AddValueDialog({
+  workspace,
+  own,
+  onClose,
+}: DialogProps & { own: readonly OwnDataValue[] }): JSX.Element {
   const { set, isBusy, error } = useDataValueChanges(workspace);
   const [kind, setKind] = useState<DataKind>('born-exponent');
   const [subject, setSubject] = useState('');
   const key = `${kind}:${subject.trim()}`;
   const read = readDataKey(key);
   const example = dataKinds.find((facts) => facts.kind === kind)?.example ?? '';
-  const isWrong = subject.trim() !== '' && read === null;
+  const earlier = own.find((value) => value.key === key) ?? null;
   return (
     <Dialog open onClose={onClose} title="Add a value">
       <ValueForm
@@ -59,8 +71,8 @@ export function AddValueDialog({ workspace, onClose }: DialogProps): JSX.Element
         isBusy={isBusy}
         error={error}
         onCancel={onClose}
-        onSave={(typed) => set({ key, ...typed }, null, onClose)}
-        before={
+        onSave={(typed) => set({ key, ...typed }, earlier, onClose)}
+        before={(isTried) => (
           <>
             <SelectField label="Quantity" options={kindOptions} value={kind} onChange={setKind} />
             <TextField
@@ -70,10 +82,10 @@ export function AddValueDialog({ workspace, onClose }: DialogProps): JSX.Element
               value={subject}
               onChange={(event) => setSubject(event.target.value)}
               hint={`Written as in ${example.slice(kind.length + 1)}`}
-              error={isWrong ? 'There is no such element or ion in this form.' : null}
+              error={subjectFault(subject, read !== null, isTried)}
             />
           </>
-        }
+        )}
       />
     </Dialog>
   );

@@ -27,8 +27,8 @@ interface ValueFormProps {
   onRestore?: (() => void) | undefined;
   isBusy: boolean;
   error: unknown;
-  /** Fields before the value. */
-  before?: JSX.Element;
+  /** Fields before the value; told whether someone tried to save. */
+  before?: (isTried: boolean) => JSX.Element;
 }
 
 function faultOf(of: DataKey | null, value: number): string | null {
@@ -47,7 +47,7 @@ function ShippedLine({ shipped, unit }: { shipped: Sourced | null; unit: string 
         <>
           Shipped:{' '}
           <span className="whitespace-nowrap text-ink tabular-nums">
-            {valueText(shipped.value)} {unit}
+            {valueText(shipped.value, unit)} {unit}
           </span>
           , {shipped.source} ({statusWord(shipped.status)}).
         </>
@@ -73,7 +73,7 @@ export function ValueForm(props: ValueFormProps): JSX.Element {
   };
   return (
     <form noValidate className="grid gap-4" onSubmit={save}>
-      {before}
+      {before?.(isTried)}
       {of !== null && <ShippedLine shipped={shipped} unit={of.facts.unit} />}
       <TextField
         label="Our value"
@@ -95,7 +95,7 @@ export function ValueForm(props: ValueFormProps): JSX.Element {
       <InlineError error={error === null ? undefined : messageOf(error)} />
       <div className="mt-2 flex flex-wrap justify-end gap-2">
         {onRestore !== undefined && (
-          <Button className="mr-auto" onClick={onRestore} disabled={isBusy}>
+          <Button className="mr-auto max-sm:w-full" onClick={onRestore} disabled={isBusy}>
             {shipped === null ? 'Take ours away' : 'Back to the shipped value'}
           </Button>
         )}
