@@ -4,10 +4,14 @@ import type { ResolvedCell } from '#common/physics/resolved-cell';
 import type { CellDefinition, EvaluationMethod } from '#common/schemas/cell';
 import type { EnergeticModel } from '#common/schemas/energetics';
 import type { EvaluationResult } from '#common/schemas/evaluation';
+import { FormationPanel } from '#client/features/formation/components/formation-panel.tsx';
 import type {
   LatticeAddress,
   SectionKey,
 } from '#client/features/lattices/hooks/use-lattice-address.ts';
+import { SpacingPanel } from '#client/features/spacing/components/spacing-panel.tsx';
+import { useDataOverrides } from '#client/lib/data-overrides.ts';
+import { useEnergyScale } from '#client/lib/energy-unit.ts';
 
 /** What the sections about energetics work from, beside the cell in numbers and its evaluation. */
 export interface EnergeticsInput {
@@ -31,9 +35,32 @@ export interface EnergeticsPanelProps {
   readonly update: (change: Partial<LatticeAddress>) => void;
 }
 
+function Spacing({ cell, result, energetics }: EnergeticsPanelProps): JSX.Element {
+  const overrides = useDataOverrides(energetics.workspace);
+  const { content, onModel } = energetics;
+  return <SpacingPanel {...{ cell, result, overrides, onModel }} model={content.model} />;
+}
+
+function Formation({ cell, result, energetics, update }: EnergeticsPanelProps): JSX.Element {
+  const overrides = useDataOverrides(energetics.workspace);
+  const scale = useEnergyScale();
+  const { content, onModel } = energetics;
+  return (
+    <FormationPanel
+      {...{ cell, result, overrides, scale, onModel }}
+      model={content.model}
+      onCell={() => update({ section: 'cell' })}
+    />
+  );
+}
+
 /** The section's panel, or null when the section is not about energetics. */
-export function energeticsPanel({ section }: EnergeticsPanelProps): JSX.Element | null {
-  switch (section) {
+export function energeticsPanel(props: EnergeticsPanelProps): JSX.Element | null {
+  switch (props.section) {
+    case 'spacing':
+      return <Spacing {...props} />;
+    case 'formation':
+      return <Formation {...props} />;
     default:
       return null;
   }

@@ -44,6 +44,8 @@ export interface LatticeScreenProps {
 const words: Record<SectionKey, string> = {
   cell: 'Cell',
   energy: 'Energy',
+  spacing: 'Spacing',
+  formation: 'Formation',
   sites: 'Sites',
   remarks: 'Remarks',
   history: 'History',

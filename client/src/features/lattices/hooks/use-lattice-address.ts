@@ -4,11 +4,19 @@ import { useSearchParams } from 'react-router-dom';
 import type { PairLedger } from '#common/schemas/evaluation';
 import { formatSceneView, parseSceneView, type SceneView } from '#client/scene/model/scene-view.ts';
 
-const sectionKeys = ['energy', 'cell', 'sites', 'remarks', 'history'] as const;
+const sectionKeys = [
+  'energy',
+  'spacing',
+  'formation',
+  'cell',
+  'sites',
+  'remarks',
+  'history',
+] as const;
 export type SectionKey = (typeof sectionKeys)[number];
 
 /** Sections that follow from the cell and its model, in their order. */
-export const computedSections: readonly SectionKey[] = ['energy'];
+export const computedSections: readonly SectionKey[] = ['energy', 'spacing', 'formation'];
 
 /** What one looks at and how: lives in the address, so that a reload or a sent link shows the same. */
 export interface LatticeAddress {
