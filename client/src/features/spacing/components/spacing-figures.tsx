@@ -91,8 +91,8 @@ export function SpacingFigures(props: SpacingFiguresProps): JSX.Element {
         model value at 0 K · gas ions to crystal, per formula unit · uniform scaling of the cell
       </p>
       <dl className="mt-3.5 grid grid-cols-[repeat(auto-fit,minmax(9.2rem,1fr))] gap-x-6 gap-y-2.5">
-        <Figure value={written(equilibriumSpacingA!, 4)} unit="Å">
-          r₀, spacing at rest; now {formatFixed(account.spacingA, 4)} Å
+        <Figure value={written(equilibriumSpacingA!, 3)} unit="Å">
+          r₀, spacing at rest; now {formatFixed(account.spacingA, 3)} Å
         </Figure>
         <Figure value={written(bulkModulusGpa!, 1)} unit="GPa">
           bulk modulus at rest

@@ -44,12 +44,12 @@ function Readout({
   scale: EnergyScale;
 }): JSX.Element {
   const energy = (ev: number) =>
-    `${formatSigned((ev * EV_IN_KJ_PER_MOL) / scale.kjPerMol, scale.decimals)} ${scale.unit}`;
+    formatSigned((ev * EV_IN_KJ_PER_MOL) / scale.kjPerMol, scale.decimals);
   const parts = [
-    { name: 'attraction', text: energy(point.attractionEv), mark: 'bg-bind' },
-    { name: 'repulsion', text: energy(point.repulsionEv), mark: 'bg-oppose' },
-    { name: 'net', text: energy(point.netEv), mark: 'bg-ink' },
-    { name: 'force', text: `${formatSigned(point.forceEvPerA, 3)} eV/Å`, mark: null },
+    { name: `attraction, ${scale.unit}`, text: energy(point.attractionEv), mark: 'bg-bind' },
+    { name: `repulsion, ${scale.unit}`, text: energy(point.repulsionEv), mark: 'bg-oppose' },
+    { name: `net, ${scale.unit}`, text: energy(point.netEv), mark: 'bg-ink' },
+    { name: 'force, eV/Å', text: formatSigned(point.forceEvPerA, 3), mark: null },
   ];
   return (
     <dl className="grid grid-cols-2 gap-x-5 gap-y-1 sm:grid-cols-4">

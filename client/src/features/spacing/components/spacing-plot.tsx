@@ -72,7 +72,7 @@ function Axes({ frame, scale }: { frame: PlotFrame; scale: EnergyScale }): JSX.E
       <text x={frame.width - frame.right} y={frame.height - 2} textAnchor="end">
         r, Å
       </text>
-      <text x={frame.left + 4} y={frame.top + 4}>
+      <text x={frame.left - 8} y={10} textAnchor="end">
         {scale.unit}
       </text>
     </g>

@@ -14,7 +14,7 @@ export interface PlotFrame {
   readonly highEv: number;
 }
 
-const margins = { left: 58, right: 12, top: 14, bottom: 34 } as const;
+const margins = { left: 58, right: 12, top: 20, bottom: 34 } as const;
 
 /**
  * A frame that shows the well in full: as far down as the attraction goes a little inside the
