@@ -9,8 +9,8 @@ export interface Subject {
   readonly detail: string;
 }
 
-const places = ['', 'first', 'second', 'third'];
-const place = (step: string): string => places[Number(step)] ?? `${step}th`;
+const places = 'first second third fourth fifth sixth seventh eighth ninth'.split(' ');
+const place = (step: string): string => places[Number(step) - 1] ?? step;
 
 const states: Partial<Record<string, string>> = {
   highspin: 'high spin',
