@@ -78,6 +78,7 @@ const publicRoutes = [
   'GET /invitations/:token',
   'POST /invitations/:token/accept',
   'GET /shares/:token',
+  'GET /shares/:token/report.pdf',
   'GET /space-groups',
   'GET /space-groups/:hallNumber',
 ];

@@ -4,7 +4,12 @@ import path from 'node:path';
 
 import { ensureBuild } from './lib/build.mjs';
 import { ensureCluster } from './lib/cluster.mjs';
-import { chromiumPackage, ensureDebianPackages, postgresPackage } from './lib/debian.mjs';
+import {
+  chromiumPackage,
+  ensureDebianPackages,
+  popplerPackage,
+  postgresPackage,
+} from './lib/debian.mjs';
 import { ensureDependencies } from './lib/dependencies.mjs';
 import { root } from './lib/paths.mjs';
 import { run } from './lib/run.mjs';
@@ -54,7 +59,7 @@ async function ring(name, projects, env) {
 
 await main(async () => {
   holdAlone('test', 'npm test');
-  await ensureDebianPackages([postgresPackage, chromiumPackage]);
+  await ensureDebianPackages([postgresPackage, chromiumPackage, popplerPackage]);
   await ensureDependencies();
   rmSync(reports, { recursive: true, force: true });
   mkdirSync(reports, { recursive: true });

@@ -8,6 +8,7 @@ import { ConfigModule } from '#server/config/config.module';
 import { DatabaseModule } from '#server/database/database.module';
 import { DemoModule } from '#server/demo/demo.module';
 import { ElectrostaticsModule } from '#server/electrostatics/electrostatics.module';
+import { ReportModule } from '#server/energetics/report/report.module';
 import { HealthModule } from '#server/health/health.module';
 import { HttpModule } from '#server/http/http.module';
 import { InstallationModule } from '#server/installation/installation.module';
@@ -40,6 +41,7 @@ import { WorkspacesModule } from '#server/workspaces/workspaces.module';
     LatticesModule,
     ReviewModule,
     SharingModule,
+    ReportModule,
     DemoModule,
   ],
 })

@@ -50,3 +50,4 @@ export async function ensureDebianPackages(wanted) {
 
 export const postgresPackage = { file: `${postgresBin}/postgres`, package: 'postgresql-15' };
 export const chromiumPackage = { file: chromiumPath, package: 'chromium' };
+export const popplerPackage = { file: '/usr/bin/pdftotext', package: 'poppler-utils' };
