@@ -41,4 +41,3 @@ export const dataValues = pgTable(
     check('data_values_finite', sql`${table.value} not in ('NaN', 'Infinity', '-Infinity')`),
   ],
 );
-export type DataValueRow = typeof dataValues.$inferSelect;
