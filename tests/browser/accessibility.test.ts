@@ -81,6 +81,8 @@ describe.each(['light', 'dark'] as const)('every page in %s', (colorScheme) => {
       const addresses = [
         ...workspacePages,
         ...sections.map((name) => `${lattice}?section=${name}`),
+        `${lattice}/report?rev=1`,
+        '/methods',
         '/me',
         '/nothing/is/here',
         ...(await linkedPages(page, lattice)),

@@ -1,5 +1,5 @@
 import { useMutation } from '@tanstack/react-query';
-import { LogOut, Monitor, Moon, Sun, UserRound, Users } from 'lucide-react';
+import { BookOpen, LogOut, Monitor, Moon, Sun, UserRound, Users } from 'lucide-react';
 import type { JSX } from 'react';
 
 import { done } from '#common/schemas/shared';
@@ -47,6 +47,9 @@ export function PersonMenu(): JSX.Element {
       <MenuSeparator />
       <MenuLink to="/me" icon={<UserRound aria-hidden className="size-4" />}>
         Account
+      </MenuLink>
+      <MenuLink to="/methods" icon={<BookOpen aria-hidden className="size-4" />}>
+        Methods
       </MenuLink>
       {workspace !== null && (
         <MenuLink

@@ -13,6 +13,7 @@ const workspacePages: RouteObject[] = [
   { index: true, lazy: lazyPage(() => import('#client/routes/shelf.tsx')) },
   { path: 'new', lazy: lazyPage(() => import('#client/routes/new-lattice.tsx')) },
   { path: 'lattices/:lattice', lazy: lazyPage(() => import('#client/routes/lattice.tsx')) },
+  { path: 'lattices/:lattice/report', lazy: lazyPage(() => import('#client/routes/report.tsx')) },
   { path: 'members', lazy: lazyPage(() => import('#client/routes/members.tsx')) },
   { path: 'data', lazy: lazyPage(() => import('#client/routes/data-values.tsx')) },
   { path: 'settings', lazy: lazyPage(() => import('#client/routes/settings.tsx')) },
@@ -26,6 +27,7 @@ const publicPages: RouteObject[] = [
     path: 'accept-invite/:token',
     lazy: lazyPage(() => import('#client/routes/accept-invite.tsx')),
   },
+  { path: 'methods', lazy: lazyPage(() => import('#client/routes/methods.tsx')) },
   { path: 's/:token', lazy: lazyPage(() => import('#client/routes/shared-revision.tsx')) },
 ];
 

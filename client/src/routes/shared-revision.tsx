@@ -1,8 +1,9 @@
 import { useQuery } from '@tanstack/react-query';
 import type { JSX } from 'react';
-import { useParams } from 'react-router-dom';
+import { Link, useParams } from 'react-router-dom';
 
 import type { SharedRevision } from '#common/schemas/sharing';
+import { ButtonLink } from '#client/components/button.tsx';
 import { Logo } from '#client/components/logo.tsx';
 import { EmptyState } from '#client/components/empty-state.tsx';
 import { ErrorState } from '#client/components/error-state.tsx';
@@ -14,6 +15,7 @@ import {
   computedSections,
   useLatticeAddress,
 } from '#client/features/lattices/hooks/use-lattice-address.ts';
+import { sharedReportAddress } from '#client/features/report/api/report.ts';
 import { sharedRevisionQuery } from '#client/features/sharing/api/shares.ts';
 import { ApiError } from '#client/lib/api-error.ts';
 import { formatDay, formatExact } from '#client/lib/relative-age.ts';
@@ -37,7 +39,7 @@ function Provenance({ shared }: { shared: SharedRevision }): JSX.Element {
   );
 }
 
-function Shown({ shared }: { shared: SharedRevision }): JSX.Element {
+function Shown({ shared, token }: { shared: SharedRevision; token: string }): JSX.Element {
   const { revision } = shared;
   const [address, update] = useLatticeAddress();
   const resolved = useResolvedCell(revision.cell);
@@ -47,7 +49,11 @@ function Shown({ shared }: { shared: SharedRevision }): JSX.Element {
         <LatticeHeader
           name={<h1 className="text-title tracking-[-0.02em]">{revision.latticeName}</h1>}
           meta={metaOfRevision(revision, resolved)}
-          actions={null}
+          actions={
+            <ButtonLink to={sharedReportAddress(token)} reloadDocument download>
+              Report as PDF
+            </ButtonLink>
+          }
         />
       }
       banner={<Provenance shared={shared} />}
@@ -102,7 +108,7 @@ function Content({ token }: { token: string }): JSX.Element {
   }
   return (
     <Page title={query.data.revision.latticeName}>
-      <Shown shared={query.data} />
+      <Shown shared={query.data} token={token} />
     </Page>
   );
 }
@@ -115,6 +121,9 @@ export function Component(): JSX.Element {
       <header className="flex h-14 items-center gap-4 border-b border-line px-4 md:px-7">
         <Logo />
         <span className="text-soft">shared revision</span>
+        <Link to="/methods" className="ml-auto text-small underline-offset-4 hover:underline">
+          Methods
+        </Link>
       </header>
       <main id="main" tabIndex={-1} className="grow">
         <Content key={token} token={token} />

@@ -3,7 +3,7 @@ import { useEffect, useMemo, useState, type JSX } from 'react';
 
 import { summariseCell } from '#common/physics/cell-summary';
 import type { Draft, LatticeSummary, RevisionDetail } from '#common/schemas/lattice';
-import { Button } from '#client/components/button.tsx';
+import { Button, ButtonLink } from '#client/components/button.tsx';
 import { ErrorState } from '#client/components/error-state.tsx';
 import { useToast } from '#client/components/toast.tsx';
 import { draftQuery } from '#client/features/cell-editor/api/draft.ts';
@@ -230,6 +230,13 @@ function Editor(props: DraftViewProps & { draft: Draft }): JSX.Element {
             actions={
               <>
                 <UnsavedMark store={store} />
+                {lattice.headRevision > 0 && (
+                  <ButtonLink
+                    to={`/w/${latticeRef.workspace}/lattices/${latticeRef.latticeId}/report?rev=${lattice.headRevision}`}
+                  >
+                    Report
+                  </ButtonLink>
+                )}
                 <ShareAction latticeRef={latticeRef} revision={lattice.headRevision} />
                 {head !== null && !(isEdited && head.state !== 'in_review') && (
                   <ReviewActions

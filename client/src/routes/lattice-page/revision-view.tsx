@@ -2,7 +2,7 @@ import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState, type JSX } from 'react';
 
 import type { LatticeSummary, RevisionDetail } from '#common/schemas/lattice';
-import { Button } from '#client/components/button.tsx';
+import { Button, ButtonLink } from '#client/components/button.tsx';
 import { ConfirmDialog } from '#client/components/confirm-dialog.tsx';
 import { ErrorState } from '#client/components/error-state.tsx';
 import { useToast } from '#client/components/toast.tsx';
@@ -124,6 +124,11 @@ function Loaded(props: RevisionViewProps & { revision: RevisionDetail }): JSX.El
             meta={metaOfRevision(revision, resolved)}
             actions={
               <>
+                <ButtonLink
+                  to={`/w/${latticeRef.workspace}/lattices/${latticeRef.latticeId}/report?rev=${revision.number}`}
+                >
+                  Report
+                </ButtonLink>
                 <ShareAction latticeRef={latticeRef} revision={revision.number} />
                 {revision.number === lattice.headRevision && (
                   <ReviewActions

@@ -1,4 +1,5 @@
 import type { JSX } from 'react';
+import { Link } from 'react-router-dom';
 
 import type { EvaluationResult } from '#common/schemas/evaluation';
 import { formatFixed } from '#common/units/format';
@@ -28,6 +29,11 @@ export function EnergyDetails({ result }: { result: EvaluationResult }): JSX.Ele
       <Disclosure title="Stress" note={`cell of ${formatFixed(result.volumeA3, 3)} Å³`}>
         <StressTable result={result} />
       </Disclosure>
+      <p className="border-t border-line py-3 text-small">
+        <Link to="/methods#electrostatics" className="underline underline-offset-4">
+          How these numbers are made
+        </Link>
+      </p>
     </div>
   );
 }
