@@ -187,7 +187,7 @@ function heatLine(lattice: FormationLine, particles: number): FormationLine[] {
     ...lattice,
     key: 'heat',
     kind: 'heat',
-    name: 'heat of the gas ions and the crystal, 0 K → 298 K',
+    name: 'heat, 0 K → 298 K',
     from: [],
     to: [],
     coefficient: particles,

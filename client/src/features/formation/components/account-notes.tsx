@@ -2,7 +2,7 @@ import type { JSX } from 'react';
 
 import type { FormationLedger } from '#common/physics/energetics/formation-ledger';
 import { Disclosure } from '#client/components/disclosure.tsx';
-import { rangeOn, valueOn } from '#client/features/formation/model/energy-scale.ts';
+import { lineValueOn, rangeOn } from '#client/features/formation/model/energy-scale.ts';
 import type { EnergyScale } from '#client/lib/energy-unit.ts';
 import {
   capitalised,
@@ -23,7 +23,7 @@ function SourceTable({ ledger, scale }: NotesProps): JSX.Element {
             <span className="text-soft">
               {line.valueKjPerMol === null
                 ? 'no value'
-                : `${valueOn(scale, line.valueKjPerMol)} ${scale.unit}`}
+                : `${lineValueOn(scale, line)} ${scale.unit}`}
             </span>
           </dt>
           <dd className="text-small text-soft">

@@ -24,16 +24,19 @@ export function BalanceCell({
   const hatch = `repeating-linear-gradient(45deg, ${colour} 0 3px, transparent 3px 6px)`;
   const solid = isHatched ? hatch : colour;
   const { before, after } = bar;
+  const isRange = bar.whole.low < bar.certain.low || bar.whole.high > bar.certain.high;
   const look = 'absolute top-1/2 h-[15px] -translate-y-1/2 rounded-[2px]';
   return (
     <span aria-hidden data-sense={bar.sense} className="relative block h-full min-h-6">
       <span className="absolute inset-y-0 left-1/2 w-px bg-line" />
       {bar.sense !== 'none' && (
         <>
-          <span
-            className={look}
-            style={{ ...across(bar.whole.low, bar.whole.high), background: hatch }}
-          />
+          {isRange && (
+            <span
+              className={look}
+              style={{ ...across(bar.whole.low, bar.whole.high), background: hatch }}
+            />
+          )}
           <span
             className={look}
             style={{ ...across(bar.certain.low, bar.certain.high), background: solid }}

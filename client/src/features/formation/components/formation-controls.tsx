@@ -32,10 +32,10 @@ export function FormationControls({
   const solvable = [ledger.formation, ...ledger.lines.filter(({ mayType }) => mayType)];
   const isLatticeSolved = ledger.solveFor === 'lattice';
   return (
-    <div className="mb-4 flex flex-wrap items-end gap-x-6 gap-y-3">
+    <div className="mb-4 flex flex-wrap items-end gap-x-5 gap-y-3">
       <SelectField
         label="Solve for"
-        className="w-72 max-w-full"
+        className="w-52 max-w-full"
         options={solvable.map(({ key, name }) => ({
           value: key,
           // Solved, the lattice line is always an enthalpy, whatever it is now.

@@ -29,9 +29,12 @@ function Head({ scale }: { scale: EnergyScale }): JSX.Element {
       </span>
       <span role="columnheader">line</span>
       <span role="columnheader" className="text-right max-sm:sr-only">
-        times value
+        value
       </span>
-      <span role="columnheader" className="flex justify-between gap-2 max-sm:sr-only">
+      <span
+        role="columnheader"
+        className="flex justify-between gap-1 whitespace-nowrap max-sm:sr-only"
+      >
         <span>binds</span> <span>opposes</span>
       </span>
       <span role="columnheader" className="pr-1 text-right">

@@ -101,7 +101,7 @@ function Named({
 /** Columns from 480 px on; below that the bar and the value share a second line. */
 export const rowGrid =
   'grid grid-cols-[1.75rem_minmax(0,1fr)_max-content] gap-x-2 ' +
-  'sm:grid-cols-[2.75rem_minmax(0,1.55fr)_8.75rem_minmax(5rem,1fr)_minmax(4.75rem,max-content)]';
+  'sm:grid-cols-[2.75rem_minmax(0,1.9fr)_8.25rem_minmax(5.75rem,1fr)_4.75rem]';
 
 /** One line of the account: what happens, its value, its bar, its share. */
 export function LedgerRow(props: LedgerRowProps): JSX.Element {
@@ -128,7 +128,7 @@ export function LedgerRow(props: LedgerRowProps): JSX.Element {
         className="flex items-start gap-1 py-2 pl-1.5 text-small text-soft max-sm:flex-col"
       >
         <CountSwitch line={line} actions={actions} />
-        {number !== null && <span className="leading-4">{number}</span>}
+        {number !== null && <span className="leading-4 whitespace-nowrap">{number}</span>}
       </span>
       <span role="cell" className="min-w-0 py-1.5">
         <Named line={line} scale={scale} actions={actions} />

@@ -24,13 +24,13 @@ interface DiagramProps {
 function TreadMark({ tread, scale }: { tread: Tread; scale: EnergyScale }): JSX.Element {
   const { from, to, y, top, spread, group, isLabelledAbove } = tread;
   const middle = (from + to) / 2;
+  // The outermost words keep to the edges of the drawing.
+  const isLast = group.rises.length === 0;
+  const anchor = from === 0 ? 'start' : isLast ? 'end' : 'middle';
+  const labelX = from === 0 ? 0 : isLast ? to : middle;
   const words = stageWords[group.stage].split(' ');
   const energy = middleOf(group.energyKjPerMol);
-  const number = rangeOn(
-    { ...scale, decimals: Math.min(scale.decimals, 1) },
-    { low: energy, high: energy },
-    true,
-  );
+  const number = rangeOn(scale, { low: energy, high: energy }, true);
   const lines = [number, ...words];
   const first = isLabelledAbove ? y - 8 - 15 * (lines.length - 1) : y + 18;
   return (
@@ -42,9 +42,9 @@ function TreadMark({ tread, scale }: { tread: Tread; scale: EnergyScale }): JSX.
       {lines.map((line, at) => (
         <text
           key={line}
-          x={middle}
+          x={labelX}
           y={first + 15 * at}
-          textAnchor="middle"
+          textAnchor={anchor}
           className={at === 0 ? 'fill-ink text-[13px] font-medium' : 'fill-soft text-[13px]'}
         >
           {line}
@@ -53,6 +53,9 @@ function TreadMark({ tread, scale }: { tread: Tread; scale: EnergyScale }): JSX.
     </g>
   );
 }
+
+/** Narrower bars, px, stand too close for their numbers. */
+const roomForNumber = 7;
 
 function RiserMark({
   riser,
@@ -80,7 +83,6 @@ function RiserMark({
         width={width}
         height={Math.max(1, Math.abs(to - from))}
         rx="2"
-        fill={rise.line.isSolved ? `url(#formation-${isBinding ? 'bind' : 'oppose'})` : undefined}
         className={
           isLit
             ? `${isBinding ? 'fill-bind' : 'fill-oppose'} stroke-ink`
@@ -95,9 +97,11 @@ function RiserMark({
             : undefined
         }
       />
-      <text x={x} y={end} textAnchor="middle" className="fill-soft text-[12px]">
-        {number}
-      </text>
+      {width >= roomForNumber && (
+        <text x={x} y={end} textAnchor="middle" className="fill-soft text-[12px]">
+          {number}
+        </text>
+      )}
     </g>
   );
 }
@@ -157,6 +161,8 @@ export function LevelDiagram({ ledger, scale, lit, onLight }: DiagramProps): JSX
   if (layout === null || groups === null) {
     return null;
   }
+  // On a phone a level is as wide as five digits.
+  const shortScale = width < 480 ? { ...scale, decimals: Math.max(0, scale.decimals - 1) } : scale;
   const spoken = groups
     .map(
       ({ stage, energyKjPerMol }) => `${stageWords[stage]} ${rangeOn(scale, energyKjPerMol, true)}`,
@@ -165,11 +171,13 @@ export function LevelDiagram({ ledger, scale, lit, onLight }: DiagramProps): JSX
   return (
     <figure className="mt-7">
       <figcaption className="mb-1 text-small text-soft">
-        Levels, {scale.unit} per formula unit, counted from the elements. Numbers are those of the
-        lines above.
+        Levels, {scale.unit} per formula unit, counted from the elements; each bar is a line of the
+        account, in its order.
       </figcaption>
       <div ref={box}>
         <svg
+          // Drawn anew for another width: Chromium keeps rounded bars where they stood.
+          key={width}
           role="img"
           aria-label={`Levels in ${scale.unit}: ${spoken}.`}
           width={width}
@@ -189,7 +197,7 @@ export function LevelDiagram({ ledger, scale, lit, onLight }: DiagramProps): JSX
             />
           ))}
           {layout.treads.map((tread) => (
-            <TreadMark key={tread.group.stage} tread={tread} scale={scale} />
+            <TreadMark key={tread.group.stage} tread={tread} scale={shortScale} />
           ))}
         </svg>
       </div>

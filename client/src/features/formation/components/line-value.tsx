@@ -3,7 +3,7 @@ import { useId, useState, type JSX, type KeyboardEvent } from 'react';
 
 import type { FormationLine } from '#common/physics/energetics/formation-line';
 import { IconButton } from '#client/components/button.tsx';
-import { valueOn } from '#client/features/formation/model/energy-scale.ts';
+import { lineValueOn } from '#client/features/formation/model/energy-scale.ts';
 import type { EnergyScale } from '#client/lib/energy-unit.ts';
 import { readNumber } from '#client/features/formation/model/formation-choices.ts';
 import { classNames } from '#client/lib/class-names.ts';
@@ -29,7 +29,7 @@ function problemOf(text: string, { kjPerMol, unit }: EnergyScale): string | null
 function useTyping({ line, scale, onType, onRestore }: LineValueProps) {
   const [text, setText] = useState<string | null>(null);
   const [problem, setProblem] = useState<string | null>(null);
-  const shown = line.valueKjPerMol === null ? '' : valueOn(scale, line.valueKjPerMol);
+  const shown = lineValueOn(scale, line);
   const leave = (): void => {
     setText(null);
     setProblem(null);
@@ -64,7 +64,7 @@ function useTyping({ line, scale, onType, onRestore }: LineValueProps) {
 }
 
 const fieldLook =
-  'h-7 w-24 rounded-control border bg-transparent px-1.5 text-right hover:border-faint ' +
+  'h-7 w-[5.5rem] rounded-control border bg-transparent px-1.5 text-right hover:border-faint ' +
   'focus:border-faint focus:bg-raised aria-invalid:border-fails placeholder:text-right';
 
 /** The value of a line, typed over in its place; an emptied field goes back to the tables. */

@@ -1,3 +1,4 @@
+import type { FormationLine } from '#common/physics/energetics/formation-line';
 import { formatFixed, formatSigned, formatTidy } from '#common/units/format';
 import type { EnergyScale } from '#client/lib/energy-unit.ts';
 
@@ -19,4 +20,13 @@ export function valueOn(scale: EnergyScale, { low, high }: Range): string {
   return low === high
     ? formatTidy(low / scale.kjPerMol, scale.fineDecimals)
     : rangeOn(scale, { low, high });
+}
+
+/** A line's own value; what is computed ends where a sum does. Empty where there is none. */
+export function lineValueOn(scale: EnergyScale, line: FormationLine): string {
+  const { valueKjPerMol: value, origin } = line;
+  if (value === null) {
+    return '';
+  }
+  return origin === 'model' || origin === 'solved' ? rangeOn(scale, value) : valueOn(scale, value);
 }

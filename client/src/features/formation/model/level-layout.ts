@@ -37,7 +37,7 @@ export interface LevelLayout {
 }
 
 /** Room above and below for the words of the outermost levels. */
-const margin = { top: 40, bottom: 44 } as const;
+const margin = { top: 62, bottom: 52 } as const;
 const widestRiser = 22;
 
 function extent(groups: readonly FormationLevelGroup[]): ValueRange {
@@ -54,7 +54,7 @@ function extent(groups: readonly FormationLevelGroup[]): ValueRange {
 /** Widths of treads and of the slots that risers stand in: what the treads leave is shared. */
 function shares(groups: readonly FormationLevelGroup[], width: number) {
   const count = groups.reduce((sum, { rises }) => sum + rises.length, 0);
-  const least = width < 480 ? 54 : 76;
+  const least = width < 480 ? 56 : 76;
   const slot = Math.max(8, Math.min(34, (width - least * groups.length) / Math.max(1, count)));
   return { slot, tread: (width - slot * count) / groups.length };
 }
