@@ -4,6 +4,7 @@ import type { ResolvedCell } from '#common/physics/resolved-cell';
 import type { CellDefinition, EvaluationMethod } from '#common/schemas/cell';
 import type { EnergeticModel } from '#common/schemas/energetics';
 import type { EvaluationResult } from '#common/schemas/evaluation';
+import { ChecksPanel } from '#client/features/checks/components/checks-panel.tsx';
 import { FormationPanel } from '#client/features/formation/components/formation-panel.tsx';
 import type {
   LatticeAddress,
@@ -52,6 +53,22 @@ function Formation({ cell, result, energetics, update }: EnergeticsPanelProps): 
       onCell={() => update({ section: 'cell' })}
     />
   );
+}
+
+/** The checks; they need no evaluation to say something. */
+export function Checks({
+  cell,
+  result,
+  problem,
+  energetics,
+}: {
+  cell: ResolvedCell;
+  result: EvaluationResult | null;
+  problem: string | null;
+  energetics: EnergeticsInput;
+}): JSX.Element {
+  const overrides = useDataOverrides(energetics.workspace);
+  return <ChecksPanel {...{ cell, result, problem, overrides }} model={energetics.content.model} />;
 }
 
 /** The section's panel, or null when the section is not about energetics. */

@@ -19,6 +19,7 @@ import {
 } from '#client/features/lattices/hooks/use-lattice-address.ts';
 import { remarksByPair } from '#client/features/review/model/anchors.ts';
 import {
+  Checks,
   energeticsPanel,
   type EnergeticsInput,
 } from '#client/routes/lattice-page/energetics-panel.tsx';
@@ -46,6 +47,7 @@ const words: Record<SectionKey, string> = {
   energy: 'Energy',
   spacing: 'Spacing',
   formation: 'Formation',
+  checks: 'Checks',
   sites: 'Sites',
   remarks: 'Remarks',
   history: 'History',
@@ -135,6 +137,17 @@ function Panel(props: LatticeScreenProps & { picked: readonly PickedIon[] }): JS
     return <>{given}</>;
   }
   const result = live.problem === null ? live.evaluation?.result : undefined;
+  const isKnown = result !== undefined || live.problem !== null;
+  if (address.section === 'checks' && resolved.cell !== null && isKnown) {
+    return (
+      <Checks
+        cell={resolved.cell}
+        result={result ?? null}
+        problem={live.problem?.message ?? null}
+        energetics={props.energetics}
+      />
+    );
+  }
   if (result !== undefined && resolved.cell !== null) {
     const { energetics, update: change } = props;
     const { section } = address;

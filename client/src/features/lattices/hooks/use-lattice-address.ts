@@ -8,6 +8,7 @@ const sectionKeys = [
   'energy',
   'spacing',
   'formation',
+  'checks',
   'cell',
   'sites',
   'remarks',
@@ -16,7 +17,7 @@ const sectionKeys = [
 export type SectionKey = (typeof sectionKeys)[number];
 
 /** Sections that follow from the cell and its model, in their order. */
-export const computedSections: readonly SectionKey[] = ['energy', 'spacing', 'formation'];
+export const computedSections: readonly SectionKey[] = ['energy', 'spacing', 'formation', 'checks'];
 
 /** What one looks at and how: lives in the address, so that a reload or a sent link shows the same. */
 export interface LatticeAddress {
