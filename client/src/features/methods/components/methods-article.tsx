@@ -10,7 +10,7 @@ import type {
 function Table({ table }: { table: MethodTable }): JSX.Element {
   return (
     <div className="my-4 overflow-x-auto" tabIndex={0} role="group" aria-label={table.caption}>
-      <table className="w-full min-w-md text-small">
+      <table className="w-full min-w-md text-small [overflow-wrap:break-word]">
         <caption className="pb-2 text-left text-soft">{table.caption}</caption>
         <thead>
           <tr className="border-b border-faint text-left">

@@ -42,7 +42,7 @@ function Table({ table, title }: { table: ReportTable; title: string }): JSX.Ele
       role="group"
       aria-label={name}
     >
-      <table className="w-full min-w-md text-small">
+      <table className="w-full min-w-md text-small [overflow-wrap:break-word]">
         <caption className={table.caption === '' ? 'sr-only' : 'pb-1 text-left text-soft'}>
           {name}
         </caption>
