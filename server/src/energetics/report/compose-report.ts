@@ -18,6 +18,7 @@ import {
   sitesSection,
   sublatticeSection,
 } from './electrostatics-sections.js';
+import { formationSection } from './formation-section.js';
 import { latticePicture } from './lattice-picture.js';
 import { modelSection } from './model-section.js';
 import { text } from './report-blocks.js';
@@ -132,7 +133,10 @@ export function composeReport(subject: ReportSubject): LatticeReport {
         : [energySection(result), ledgerSection(result)]),
       ...(result === null || resolved === null
         ? []
-        : [modelSection(resolved, result, revision.model, subject.overrides)]),
+        : [
+            modelSection(resolved, result, revision.model, subject.overrides),
+            formationSection(resolved, result, revision.model, subject.overrides),
+          ]),
       ...(result === null
         ? []
         : [sitesSection(result), sublatticeSection(result), certificateSection(result)]),

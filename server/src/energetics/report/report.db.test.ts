@@ -56,6 +56,10 @@ const spelled: readonly [string, string][] = [
   ['β', 'beta'],
   ['γ', 'gamma'],
   ['ρ', 'rho'],
+  ['ν', 'nu'],
+  ['Δ', 'Delta'],
+  ['Σ', 'Sum'],
+  ['→', 'to'],
 ];
 
 /** Text as one can compare it: raised signs on the line, no spaces, Greek spelled. */
