@@ -1,5 +1,7 @@
+import { hazardsOf } from '#common/chemistry/hazards';
 import type { DataOverrides } from '#common/chemistry/sourced';
 import { resolveCell } from '#common/physics/resolve-cell';
+import type { ResolvedCell } from '#common/physics/resolved-cell';
 import type { RevisionDetail } from '#common/schemas/lattice';
 import type { LatticeReport, ReportSection } from '#common/schemas/report';
 import {
@@ -18,6 +20,7 @@ import {
   sitesSection,
   sublatticeSection,
 } from './electrostatics-sections.js';
+import { checksSection } from './checks-section.js';
 import { formationSection } from './formation-section.js';
 import { latticePicture } from './lattice-picture.js';
 import { modelSection } from './model-section.js';
@@ -85,10 +88,13 @@ function sourcesSection(): ReportSection {
   };
 }
 
-const caution: ReportSection = {
+const cautionSection = (cell: ResolvedCell | null): ReportSection => ({
   key: 'caution',
   title: 'Caution',
   blocks: [
+    ...(cell === null
+      ? []
+      : hazardsOf(cell).map((words) => ({ kind: 'caution' as const, text: words }))),
     {
       kind: 'caution',
       text:
@@ -96,7 +102,7 @@ const caution: ReportSection = {
         'For any work with it, the safety data sheet, local codes and licensed practice decide.',
     },
   ],
-};
+});
 
 /** Everything on the report of a revision; pure but for what it is given. */
 export function composeReport(subject: ReportSubject): LatticeReport {
@@ -140,8 +146,11 @@ export function composeReport(subject: ReportSubject): LatticeReport {
       ...(result === null
         ? []
         : [sitesSection(result), sublatticeSection(result), certificateSection(result)]),
+      ...(resolved === null
+        ? []
+        : [checksSection(resolved, result, revision.model, subject.overrides)]),
       sourcesSection(),
-      caution,
+      cautionSection(resolved),
     ],
   };
 }
