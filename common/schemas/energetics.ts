@@ -120,14 +120,13 @@ export const checkWord = z.enum(['holds', 'doubtful', 'fails', 'not_judged']);
 export type CheckWord = z.infer<typeof checkWord>;
 
 /** The worst word of the checks that could be made, and how many say what. */
-export const verdictSummary = z.object({
-  word: checkWord,
-  holds: z.number().int(),
-  doubtful: z.number().int(),
-  fails: z.number().int(),
-  notJudged: z.number().int(),
-});
-export type VerdictSummary = z.infer<typeof verdictSummary>;
+export interface VerdictSummary {
+  readonly word: CheckWord;
+  readonly holds: number;
+  readonly doubtful: number;
+  readonly fails: number;
+  readonly notJudged: number;
+}
 
 /** A value of the shipped tables that a workspace replaced by its own. */
 export const dataValue = z.object({

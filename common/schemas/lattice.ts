@@ -2,7 +2,7 @@ import { z } from 'zod';
 
 import { cellDefinition, evaluationMethod } from '#common/schemas/cell';
 import { bounded, evaluationProblem, storedEvaluation } from '#common/schemas/evaluation';
-import { defaultEnergeticModel, energeticModel, verdictSummary } from '#common/schemas/energetics';
+import { defaultEnergeticModel, energeticModel } from '#common/schemas/energetics';
 import { id, pageOf, pageQuery, personSummary, timestamp } from '#common/schemas/shared';
 
 export const revisionState = z.enum(['draft', 'in_review', 'accepted', 'returned']);
@@ -25,8 +25,6 @@ export const latticeSummary = z.object({
   energyEvPerFormulaUnit: bounded.nullable(),
   /** Why there is no energy, when there is none. */
   problemCode: z.string().nullable(),
-  /** What the checks said when the newest revision was saved; null before. */
-  verdict: verdictSummary.nullable(),
   state: revisionState,
   /** Number of the newest revision; 0 when only a draft exists. */
   headRevision: z.number().int(),

@@ -43,7 +43,6 @@ export const latticeOf = (change: Partial<LatticeSummary> = {}): LatticeSummary 
   madelungReduced: { value: 1.74756459463318, bound: 4e-12 },
   energyEvPerFormulaUnit: { value: -47.7954617216, bound: 4e-10 },
   problemCode: null,
-  verdict: null,
   state: 'in_review',
   headRevision: 4,
   hasDraft: false,

@@ -12,7 +12,7 @@ import {
   fluoriteCell,
   rockSaltCell,
   type TestSite,
-} from '../../../tests/helpers/resolved-cells.js';
+} from '#tests/helpers/resolved-cells';
 
 const nameless = { spaceGroupNumber: null, spaceGroupSymbol: null };
 

@@ -22,7 +22,6 @@ export const presentLattice = (row: ShelfRow): LatticeSummary => ({
     row.energyBoundEvPerFormulaUnit,
   ),
   problemCode: row.problemCode,
-  verdict: row.verdict,
   state: row.state,
   headRevision: row.headRevision,
   hasDraft: row.hasDraft,

@@ -5,7 +5,6 @@ import {
   foreignKey,
   index,
   integer,
-  jsonb,
   pgEnum,
   pgTable,
   text,
@@ -13,7 +12,6 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 
-import type { VerdictSummary } from '#common/schemas/energetics';
 import { revisionState, type RevisionState } from '#common/schemas/lattice';
 import { createdAt, idColumn, moment } from '#server/database/columns';
 import { users } from '#server/users/user.table';
@@ -36,8 +34,6 @@ const headline = () => ({
   energyBoundEvPerFormulaUnit: doublePrecision('energy_bound_ev_per_formula_unit'),
   /** Why there is no energy. */
   problemCode: text('problem_code'),
-  /** What the checks say. */
-  verdict: jsonb('verdict').$type<VerdictSummary>(),
 });
 
 export const lattices = pgTable(

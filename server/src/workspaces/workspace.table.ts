@@ -1,5 +1,5 @@
 import { sql } from 'drizzle-orm';
-import { boolean, check, jsonb, pgTable, text, unique } from 'drizzle-orm/pg-core';
+import { boolean, check, pgTable, text, unique } from 'drizzle-orm/pg-core';
 
 import { createdAt, idColumn } from '#server/database/columns';
 
@@ -11,14 +11,11 @@ export const workspaces = pgTable(
     name: text('name').notNull(),
     readersMayComment: boolean('readers_may_comment').notNull().default(true),
     requiresSecondPerson: boolean('requires_second_person').notNull().default(true),
-    /** Limits of checks that this workspace sets otherwise, by their keys. */
-    checkLimits: jsonb('check_limits').$type<Record<string, number>>().notNull().default({}),
     createdAt: createdAt(),
   },
   (table) => [
     unique('workspaces_slug').on(table.slug),
     check('workspaces_slug_form', sql`${table.slug} ~ '^[a-z0-9]([a-z0-9-]{0,46}[a-z0-9])?$'`),
-    check('workspaces_check_limits_json', sql`jsonb_typeof(${table.checkLimits}) = 'object'`),
     check('workspaces_name_length', sql`char_length(btrim(${table.name})) between 1 and 80`),
   ],
 );
