@@ -25,9 +25,6 @@ const looks: Record<CheckWord, { word: string; colour: string; shape: JSX.Elemen
   },
 };
 
-/** Word of a check or a verdict. */
-export const verdictWord = (word: CheckWord): string => looks[word].word;
-
 /** What a check says: a word and a shape, never colour alone. */
 export function VerdictBadge({
   word: checkWord,
