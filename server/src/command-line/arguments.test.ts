@@ -16,8 +16,31 @@ describe('the command line', () => {
     expect(read.method.toleranceRelative).toBe(1e-10);
   });
 
+  it('takes a repulsion with its number', () => {
+    const repulsionOf = (...args: string[]) => readArguments(['a.cif', ...args]).repulsion;
+    expect(repulsionOf()).toBeNull();
+    expect(repulsionOf('--repulsion', 'born-lande')).toEqual({
+      kind: 'born_lande',
+      exponent: { from: 'ions' },
+    });
+    expect(repulsionOf('--repulsion', 'born-lande', '--exponent', '8')).toEqual({
+      kind: 'born_lande',
+      exponent: { from: 'typed', exponent: { low: 8, high: 8 } },
+    });
+    expect(repulsionOf('--repulsion', 'born-mayer', '--rho=0.321')).toEqual({
+      kind: 'born_mayer',
+      hardnessA: { low: 0.321, high: 0.321 },
+    });
+  });
+
   it.each([
     [[]],
+    [['a.cif', '--repulsion', 'hard']],
+    [['a.cif', '--exponent', '8']],
+    [['a.cif', '--repulsion', 'born-lande', '--rho', '0.3']],
+    [['a.cif', '--repulsion', 'born-lande', '--exponent', '']],
+    [['a.cif', '--repulsion', 'born-lande', '--exponent', '90']],
+    [['a.cif', '--repulsion', 'born-mayer', '--exponent', '8']],
     [['--charges', 'Na=1']],
     [['a.cif', '--speed', '9']],
     [['a.cif', '--charges', 'Na']],

@@ -3,8 +3,14 @@ import path from 'node:path';
 
 import { Problem, type FieldProblem } from '#common/errors/problem';
 import type { ErrorCode } from '#common/errors/error-codes';
+import { noOverrides } from '#common/chemistry/sourced';
+import type { CheckResult } from '#common/physics/checks/check-result';
+import { judge } from '#common/physics/checks/judge';
+import { energeticsOf } from '#common/physics/energetics/energetics-account';
 import { resolveCell } from '#common/physics/resolve-cell';
+import type { ResolvedCell } from '#common/physics/resolved-cell';
 import type { CellDefinition } from '#common/schemas/cell';
+import { defaultEnergeticModel, type RepulsionModel } from '#common/schemas/energetics';
 import type { EvaluationResult, Warning } from '#common/schemas/evaluation';
 import { completeCharges, type CompletedCharges } from '#server/cif/complete-charges';
 import { readStructure, type ReadStructure } from '#server/cif/read-structure';
@@ -31,6 +37,14 @@ export interface EvaluatedFile {
   readonly warnings: readonly Warning[];
 }
 
+/** What a repulsion model adds; null where it gives no number. */
+export interface EnergeticsOfFile {
+  readonly latticeEnergyKjPerMol: number | null;
+  readonly bulkModulusGpa: number | null;
+  readonly kapustinskiiKjPerMol: number | null;
+  readonly checks: readonly Pick<CheckResult, 'key' | 'word' | 'value' | 'finding'>[];
+}
+
 /** One line of output for a file that was not. */
 export interface FailedFile {
   readonly file: string;
@@ -49,9 +63,9 @@ const largestFileBytes = 50_000_000;
 export async function evaluateFile(
   file: string,
   folder: string,
-  { charges, method }: Pick<EvaluateArguments, 'charges' | 'method'>,
+  { charges, method, repulsion }: Pick<EvaluateArguments, 'charges' | 'method' | 'repulsion'>,
   onUnexpected: (error: unknown) => void,
-): Promise<EvaluatedFile | FailedFile> {
+): Promise<(EvaluatedFile & Partial<EnergeticsOfFile>) | FailedFile> {
   try {
     const structure = readStructure(await readText(path.resolve(folder, file)));
     const completed = completeCharges(structure, charges);
@@ -66,10 +80,27 @@ export async function evaluateFile(
       spaceGroupNumber: symmetry.setting?.number ?? null,
       spaceGroupSymbol: symmetry.setting?.symbol ?? null,
     });
-    return present(file, cell, result, [...structure.warnings, ...warnings]);
+    const line = present(file, cell, result, [...structure.warnings, ...warnings]);
+    return repulsion === null ? line : { ...line, ...energetics(resolved, result, repulsion) };
   } catch (error) {
     return { file, ok: false, error: describe(error, onUnexpected) };
   }
+}
+
+function energetics(
+  cell: ResolvedCell,
+  result: EvaluationResult,
+  repulsion: RepulsionModel,
+): EnergeticsOfFile {
+  const model = { ...defaultEnergeticModel, repulsion };
+  const account = energeticsOf(cell, result, model, noOverrides);
+  const { checks } = judge(cell, result, model, noOverrides);
+  return {
+    latticeEnergyKjPerMol: account.latticeEnergyKjPerMol?.low ?? null,
+    bulkModulusGpa: account.bulkModulusGpa?.low ?? null,
+    kapustinskiiKjPerMol: account.kapustinskii.energyKjPerMol,
+    checks: checks.map(({ key, word, value, finding }) => ({ key, word, value, finding })),
+  };
 }
 
 async function readText(fullPath: string): Promise<string> {

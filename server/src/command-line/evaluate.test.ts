@@ -157,6 +157,24 @@ describe('evaluating the shipped structures', () => {
   });
 });
 
+describe('with a repulsion', () => {
+  it('adds lattice energy, bulk modulus, estimate and checks', async () => {
+    const asked = ['rock-salt.cif', '--repulsion', 'born-lande', '--exponent', '8'];
+    const { code, lines } = await evaluate(asked, structures);
+    expect(code).toBe(0);
+    const line = lines[0]!;
+    // U = E (1 − 1/n), 1 eV = 96.485 332 12 kJ mol⁻¹ (exact SI).
+    const expected = (line['energyEvPerFormulaUnit'] as number) * (1 - 1 / 8) * 96.48533212;
+    expect(line['latticeEnergyKjPerMol']).toBeCloseTo(expected, 4);
+    expect(line['bulkModulusGpa']).toBeGreaterThan(20);
+    // 1202.5 · 2/2.83 · (1 − 0.345/2.83) with radii of Na⁺ 1.02 and Cl⁻ 1.81 Å.
+    expect(line['kapustinskiiKjPerMol']).toBeCloseTo(-746.22, 2);
+    expect(line['checks']).toContainEqual(
+      expect.objectContaining({ key: 'charge_balance', word: 'holds' }),
+    );
+  }, 60_000);
+});
+
 describe('files that fail', () => {
   const folder = mkdtempSync(path.join(tmpdir(), 'holdfast-evaluate-'));
   afterAll(() => rmSync(folder, { recursive: true, force: true }));
