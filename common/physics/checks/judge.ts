@@ -54,14 +54,18 @@ const names: readonly (readonly [CheckKey, string])[] = [
   ['formation', 'Formation enthalpy'],
 ];
 
-/** Checks that need computations this version does not make for a page. */
+/** Checks that need computations this version does not make yet. */
 const laterChecks: readonly CheckResult[] = [
   notJudged(
     'elastic_stability',
     'Elastic stability',
-    'No elastic constants have been computed for this cell.',
+    'This version computes no elastic constants for a page yet.',
   ),
-  notJudged('rivals', 'Rival structures', 'No rival structures have been computed for these ions.'),
+  notJudged(
+    'rivals',
+    'Rival structures',
+    'This version lays the ions out in no rival structures yet.',
+  ),
 ];
 
 const badness: readonly CheckWord[] = ['holds', 'doubtful', 'fails'];

@@ -30,6 +30,18 @@ export const checkLimits = {
     unit: 'of the radius sum',
     source: practice,
   },
+  likeDoubtful: {
+    name: 'ions of one sign nearer than',
+    value: 1,
+    unit: 'of the shortest cation–anion distance',
+    source: practice,
+  },
+  likeFails: {
+    name: 'ions of one sign nearer than',
+    value: 0.8,
+    unit: 'of the shortest cation–anion distance',
+    source: practice,
+  },
   potentialWeak: {
     name: 'potential below',
     value: 0.5,

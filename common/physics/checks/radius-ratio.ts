@@ -4,7 +4,7 @@ import {
   type CheckResult,
   type CheckSubject,
 } from '#common/physics/checks/check-result';
-import type { SizedIon } from '#common/physics/energetics/ion-sizes';
+import { ionName, type SizedIon } from '#common/physics/energetics/ion-sizes';
 import { formatFixed } from '#common/units/format';
 
 const key = 'radius_ratio';
@@ -29,6 +29,15 @@ const classOfRatio = (ratio: number): number =>
     classes.findLastIndex((one) => limit(one.limit) <= ratio),
   );
 
+/** Classes between the coordination a ratio asks for and the one there is. */
+function classesApart(ratio: number, coordination: number): number {
+  const actual = classOfCoordination(coordination);
+  // A cation larger than its anions is as content with eight neighbours as with twelve.
+  return ratio >= 1
+    ? Math.max(0, classes.length - 2 - actual)
+    : Math.abs(classOfRatio(ratio) - actual);
+}
+
 function meanRadiusA(ions: readonly SizedIon[]): number {
   const count = ions.reduce((sum, { perFormulaUnit }) => sum + perFormulaUnit, 0);
   return ions.reduce((sum, ion) => sum + ion.radiusA! * ion.perFormulaUnit, 0) / count;
@@ -43,23 +52,23 @@ export function checkRadiusRatio({ ions }: CheckSubject): CheckResult {
     const why =
       unsized === undefined
         ? 'There are no ions of both signs.'
-        : `The tables have no ionic radius for ${unsized.speciesKey}.`;
+        : `The tables have no ionic radius for ${ionName(unsized)}.`;
     return notJudged(key, name, why);
   }
   const anionA = meanRadiusA(anions);
   const judged = cations.map((ion) => {
     const ratio = ion.radiusA! / anionA;
-    const apart = Math.abs(classOfRatio(ratio) - classOfCoordination(ion.coordination));
+    const apart = classesApart(ratio, ion.coordination);
     return { ion, ratio, apart };
   });
   const worst = judged.reduce((a, b) => (b.apart > a.apart ? b : a));
-  const expected = classes[classOfRatio(worst.ratio)]!.neighbours;
+  const expected = worst.ratio >= 1 ? '8 to 12' : classes[classOfRatio(worst.ratio)]!.neighbours;
   return {
     ...{ key, name },
     word: worst.apart === 0 ? 'holds' : worst.apart === 1 ? 'doubtful' : 'fails',
     finding:
-      `${worst.ion.speciesKey} has ${worst.ion.coordination} neighbours at a radius ratio of ` +
-      `${formatFixed(worst.ratio, 3)}, which asks for ${expected}. Two oxides in three follow the rule.`,
+      `${ionName(worst.ion)} has ${worst.ion.coordination} neighbours at a radius ratio of ` +
+      `${formatFixed(worst.ratio, 3)}, which asks for ${expected}.`,
     value: worst.ratio,
     unit: '',
     limits: classes.map((one) => one.limit),

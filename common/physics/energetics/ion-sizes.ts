@@ -2,6 +2,7 @@ import { ionicRadiusA } from '#common/chemistry/ionic-radii';
 import type { DataOverrides } from '#common/chemistry/sourced';
 import type { ResolvedCell, SiteComponent } from '#common/physics/resolved-cell';
 import type { EvaluationResult } from '#common/schemas/evaluation';
+import { formatCharge, superscript } from '#common/units/format';
 
 /** An ion kind of the cell with its surroundings. */
 export interface SizedIon {
@@ -14,6 +15,12 @@ export interface SizedIon {
   /** Mean effective ionic radius for that coordination; null where the tables have none. */
   readonly radiusA: number | null;
 }
+
+/** An ion kind as chemists write it: `Mg²⁺`; the ions of a shared site one after the other. */
+export const ionName = ({ components }: Pick<SizedIon, 'components'>): string =>
+  components
+    .map(({ element, chargeE }) => `${element}${superscript(formatCharge(chargeE))}`)
+    .join('/');
 
 /** Neighbours this much farther than the nearest of opposite charge still count as its shell. */
 const shellWidth = 1.25;

@@ -103,8 +103,19 @@ describe('closest contacts', () => {
   it('can’t be judged without a radius', () => {
     expect(check('contacts', rockSaltCell(4.212, 1))).toMatchObject({
       word: 'not_judged',
-      finding: 'The tables have no ionic radius for Mg+1.',
+      finding: 'The tables have no ionic radius for Mg⁺.',
     });
+  });
+});
+
+describe('ions of like charge', () => {
+  it('fail the contacts when they stand nearer than cation and anion do', () => {
+    const paired = cubicCell(5, [
+      { element: 'Ca', chargeE: 2, at: [0, 0, 0], row: 0 },
+      { element: 'F', chargeE: -1, at: [0.5, 0.5, 0.4], row: 1 },
+      { element: 'F', chargeE: -1, at: [0.5, 0.5, 0.6], row: 2 },
+    ]);
+    expect(check('contacts', paired)).toMatchObject({ word: 'fails' });
   });
 });
 
@@ -150,6 +161,14 @@ describe('coordination and radius ratio', () => {
 
   it('fails two classes away: Be²⁺ among eight O²⁻', () => {
     expect(check('radius_ratio', eightfold(2.4, 'Be', 'O', 2)).word).toBe('fails');
+  });
+
+  // Radii of Shannon (1976): K⁺ 1.38, F⁻ 1.33 Å.
+  it('is doubtful for potassium fluoride, whose cation is the larger', () => {
+    expect(check('radius_ratio', sixfold(5.347, 'K', 'F'))).toMatchObject({
+      word: 'doubtful',
+      finding: 'K⁺ has 6 neighbours at a radius ratio of 1.038, which asks for 8 to 12.',
+    });
   });
 
   it('can’t be judged without a radius', () => {

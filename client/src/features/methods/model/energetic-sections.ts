@@ -95,7 +95,7 @@ const dynamics: MethodSection = {
   title: 'Relaxation, elastic constants, vibrations',
   blocks: [
     say(
-      'All three follow from the pair model: periodic electrostatics and the short-range terms, with forces, stress and second derivatives in closed form.',
+      'Holdfast’s engine computes these; no page offers them yet. All three follow from the pair model: periodic electrostatics and the short-range terms, with forces, stress and second derivatives in closed form.',
     ),
     say('Relaxation lowers the energy over cell and coordinates within the space group.'),
     formula('C_{ij} = [1¦V] [∂^2E¦∂ε_i ∂ε_j], ions free to follow'),
