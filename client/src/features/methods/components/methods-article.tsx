@@ -55,7 +55,7 @@ export function MethodsArticle({ sections }: { sections: readonly MethodSection[
       <nav aria-label="On this page" className="print:hidden">
         <ol className="columns-2 gap-6 text-small wide:sticky wide:top-6 wide:columns-1">
           {sections.map(({ id, title }) => (
-            <li key={id} className="py-1">
+            <li key={id} className="break-inside-avoid py-1">
               <a href={`#${id}`} className="underline-offset-4 hover:underline">
                 {title}
               </a>
