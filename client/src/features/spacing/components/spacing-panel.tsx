@@ -46,9 +46,9 @@ function Readout({
   const energy = (ev: number) =>
     formatSigned((ev * EV_IN_KJ_PER_MOL) / scale.kjPerMol, scale.decimals);
   const parts = [
-    { name: `attraction, ${scale.unit}`, text: energy(point.attractionEv), mark: 'bg-bind' },
-    { name: `repulsion, ${scale.unit}`, text: energy(point.repulsionEv), mark: 'bg-oppose' },
-    { name: `net, ${scale.unit}`, text: energy(point.netEv), mark: 'bg-ink' },
+    { name: 'attraction', text: energy(point.attractionEv), mark: 'bg-bind' },
+    { name: 'repulsion', text: energy(point.repulsionEv), mark: 'bg-oppose' },
+    { name: 'net', text: energy(point.netEv), mark: 'bg-ink' },
     { name: 'force, eV/Å', text: formatSigned(point.forceEvPerA, 3), mark: null },
   ];
   return (
@@ -82,10 +82,13 @@ function Curve({ account }: { account: EnergeticsAccount }): JSX.Element {
   return (
     <section aria-labelledby="spacing-curve" className="mt-6">
       <h2 id="spacing-curve" className="mb-2 font-bold">
-        Energy against spacing
+        Energy against spacing{' '}
+        <span className="text-small font-normal text-soft">{scale.unit} per formula unit</span>
       </h2>
       <div ref={frame}>
+        {/* Chromium may keep the old clip after a change of width: drawn anew instead. */}
         <SpacingPlot
+          key={width}
           width={width}
           curves={curves}
           marker={point}
