@@ -22,7 +22,16 @@ afterAll(async () => {
 const workspacePages = ['', '/new', '/members', '/data', '/settings', '/audit'].map(
   (page) => `/w/kiln-lane${page}`,
 );
-const sections = ['energy', 'cell', 'sites', 'remarks', 'history'];
+const sections = [
+  'energy',
+  'spacing',
+  'formation',
+  'checks',
+  'cell',
+  'sites',
+  'remarks',
+  'history',
+];
 
 /** What axe finds on the page as it stands, in words. */
 async function findings(page: Page): Promise<string[]> {
