@@ -205,15 +205,16 @@ describe.each(Object.entries(alkaliHalides))('%s', (salt, [r0, gpa, rho, measure
   const a = binding(rockSalt, 1, r0);
   const volumeA3 = 2 * r0 ** 3;
 
-  it('has the bulk modulus of its Born–Mayer hardness within 15 %', () => {
+  it('gives back the bulk modulus its Born–Mayer hardness was fitted to', () => {
     const computed = bulkModulusGpa(bornMayerLaw(a, r0, rho), 1, volumeA3);
-    expect(Math.abs(computed / gpa - 1)).toBeLessThan(0.15);
+    expect(Math.abs(computed / gpa - 1)).toBeLessThan(0.006);
   });
 
-  it('has the measured lattice energy within 3 %, from the exponents of its ions', () => {
+  it('has the textbook’s measured lattice energy within 3 %, from the exponents of its ions', () => {
     const n = (exponents[cationOf(salt)]! + exponents[salt.slice(cationOf(salt).length)]!) / 2;
     const computed = atRestKjPerMol(bornLandeLaw(a, n));
     const deviation = Math.abs(computed / (4.184 * measuredKcal) - 1);
+    // These energies lie 2–4 % below Born–Haber enthalpies at 298 K: no tight check.
     // Small cations between large anions that touch one another: the simple exponents fall short.
     expect(deviation).toBeLessThan(['LiBr', 'LiI'].includes(salt) ? 0.041 : 0.03);
   });

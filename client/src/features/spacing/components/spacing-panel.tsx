@@ -114,8 +114,11 @@ function Curve({ account }: { account: EnergeticsAccount }): JSX.Element {
       <Readout point={point} scale={scale} />
       <p className="mt-3 text-small text-soft">
         All distances scale with the shortest cation–anion distance r. Green: at rest; dashed: the
-        cell as it is{laws.length > 1 ? '; shaded: between the ends of the range' : ''}. The force
-        is −dE/dr: positive pushes the ions apart.
+        cell as it is
+        {laws.length > 1
+          ? '; shaded: between the ends of the range, readings at its first end'
+          : ''}
+        . The force is −dE/dr: positive pushes the ions apart.
       </p>
     </section>
   );
