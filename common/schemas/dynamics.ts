@@ -1,5 +1,7 @@
 import { z } from 'zod';
 
+import { crystalSystem } from '#common/schemas/symmetry';
+
 /**
  * Results of relaxation, elastic constants and vibrations at Γ under a pair model. Lengths in Å,
  * energies in eV per cell unless the name says otherwise. Strain and stress components come in the
@@ -147,15 +149,7 @@ export const elasticResult = z.object({
   unstableInternalModes: z.number().int(),
   stability: z.object({
     /** Crystal system the criteria belong to. */
-    system: z.enum([
-      'triclinic',
-      'monoclinic',
-      'orthorhombic',
-      'tetragonal',
-      'trigonal',
-      'hexagonal',
-      'cubic',
-    ]),
+    system: crystalSystem,
     isStable: z.boolean(),
     criteria: z.array(stabilityCriterion),
     source: z.string(),

@@ -32,6 +32,13 @@ export function rockSalt(edgeA: number, pairs: readonly PairTerm[], charge = 1):
 }
 
 /** Repulsion between unlike ions alone, and between all pairs with dispersion. */
+/** Criteria tight enough that the minimum itself is known to 10⁻⁹ Å. */
+export const tight = {
+  maxForceEvPerA: 1e-10,
+  maxStressEvPerA3: 1e-11,
+  energyChangeEvPerIon: 1e-8,
+};
+
 export const unlikeOnly = [pairTerm(0, 1, 1200, 0.32)];
 export const allPairs = [
   pairTerm(0, 0, 420, 0.31, 1.2),

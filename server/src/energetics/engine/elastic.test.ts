@@ -12,13 +12,12 @@ import {
   rutile,
   rutileOperations,
   supercell,
+  tight,
   unlikeOnly,
 } from '#tests/helpers/pair-model-cells';
 
 import type { CellOperation, PairModelInput } from './contract.js';
 import { elasticConstants, evaluatePairModel, relax } from './index.js';
-
-const tight = { maxForceEvPerA: 1e-10, maxStressEvPerA3: 1e-11, energyChangeEvPerIon: 1e-8 };
 
 function atRest(
   cell: PairModelInput,

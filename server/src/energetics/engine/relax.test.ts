@@ -12,14 +12,12 @@ import {
   rutile,
   rutileOperations,
   supercell,
+  tight,
   unlikeOnly,
 } from '#tests/helpers/pair-model-cells';
 
 import type { PairModelInput } from './contract.js';
 import { evaluatePairModel, relax, type RelaxResult } from './index.js';
-
-/** Tight enough that the minimum itself is known to 10⁻⁹ Å. */
-const tight = { maxForceEvPerA: 1e-10, maxStressEvPerA3: 1e-11, energyChangeEvPerIon: 1e-8 };
 
 /** The metric tensor and the coordinates less the first ion's: what no rotation changes. */
 function shapeOf({ vectorsA: v, fractional }: Pick<RelaxResult, 'vectorsA' | 'fractional'>) {
@@ -39,7 +37,7 @@ function largestDifference(a: readonly number[], b: readonly number[]): number {
   return Math.max(...a.map((x, k) => Math.abs(x - b[k]!)));
 }
 
-/** A start near a cell: any strain and displacement up to the sizes given. */
+/** A start near a cell, strained and displaced at random up to the sizes given. */
 function randomStart(cell: PairModelInput, strain: number, moveA: number, seed: number) {
   const random = seededNumbers(seed);
   const within = (size: number) => size * (2 * random() - 1);

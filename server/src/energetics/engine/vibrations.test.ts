@@ -16,6 +16,7 @@ import {
   rutile,
   rutileOperations,
   supercell,
+  tight,
   unlikeOnly,
 } from '#tests/helpers/pair-model-cells';
 
@@ -23,7 +24,6 @@ import type { PairModelInput } from './contract.js';
 import { evaluatePairModel, relax, vibrationsAtGamma } from './index.js';
 import { symmetricEigensystem } from './linear-algebra.js';
 
-const tight = { maxForceEvPerA: 1e-10, maxStressEvPerA3: 1e-11, energyChangeEvPerIon: 1e-8 };
 const none = { operations: [] };
 
 function atRest(
